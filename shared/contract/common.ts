@@ -1,0 +1,38 @@
+import { z } from 'zod'
+import { ERROR_CODES } from './error-codes'
+import { LIMITS } from './limits'
+
+export const id = z.uuid()
+export const slug = z
+  .string()
+  .max(80)
+  .regex(/^[a-z0-9]+(-[a-z0-9]+)*$/, 'Use lower-case letters, digits and single hyphens.')
+/** Calendar day in the athlete's own time zone, YYYY-MM-DD. */
+export const day = z.iso.date()
+export const instant = z.iso.datetime()
+export const email = z.email().max(LIMITS.email.max)
+export const password = z
+  .string()
+  .min(LIMITS.password.min, `Use at least ${LIMITS.password.min} characters.`)
+  .max(LIMITS.password.max)
+export const note = z.string().trim().max(LIMITS.note.max)
+export const side = z.enum(['left', 'right'])
+
+/** The one error shape of the API. `fields` names each offending input by its dotted path. */
+export const errorBody = z.object({
+  error: z.object({
+    code: z.enum(ERROR_CODES),
+    message: z.string(),
+    fields: z.array(z.object({ path: z.string(), message: z.string() })),
+    requestId: z.string(),
+  }),
+})
+export type ErrorBody = z.infer<typeof errorBody>
+
+/** The one list shape of the API. */
+export const list = <T extends z.ZodType>(item: T) => z.object({ items: z.array(item), nextCursor: z.string().nullable() })
+
+export const pageQuery = z.object({
+  cursor: z.string().max(200).optional(),
+  limit: z.coerce.number().int().min(1).max(LIMITS.pageSize.max).default(LIMITS.pageSize.default),
+})

@@ -1,0 +1,122 @@
+import type { Action, ArmPlane, Grip, GripWidth, Guidance, Support } from './vocabulary'
+
+/**
+ * What a coach authors: the geometry of an exercise. Angles in degrees, lengths in fractions of stature,
+ * loads in kg (their places and directions here, their size at run time).
+ *
+ * World axes: x forward (the way a standing athlete faces), y to the athlete's left, z up.
+ * Trunk axes: `up` from pelvis to head, `forward` out of the chest, `lateral` out of the limb's own side.
+ * With trunk lean t: up = (sin t, 0, cos t), forward = (cos t, 0, −sin t). Standing is 0, prone (head forward) 90,
+ * supine −90, upside down 180.
+ *
+ * An arm moves in one plane spanned by (p, q): sagittal p = −up, q = forward; frontal p = −up, q = lateral;
+ * transverse p = lateral, q = forward. A shoulder angle θ points the upper arm along p·cos θ + q·sin θ, and the
+ * elbow's flexion adds to it, so that 0 hangs beside the trunk (sagittal, frontal) or points sideways (transverse).
+ */
+export interface ExerciseMechanics {
+  guidance: Guidance
+  /** oneAtATime: the frames describe the working side; the other limb follows `offArm` and `offLeg`. */
+  sides: 'both' | 'oneAtATime'
+  grip: Grip
+  gripWidth: GripWidth
+  armPlane: ArmPlane
+  supports: Support[]
+  /** Height of the hands' (or forearms', upper back's) bearing above the feet's (or knees') when both bear. */
+  rise?: number
+  /** Two to four postures through the repetition, in order. */
+  frames: Frame[]
+  balance?: Balance
+  loads: LoadPath[]
+  moments?: DirectMoment[]
+  /** Load at which the posture is balanced, as a share of body mass (negative is assistance). */
+  referenceLoad: number
+  /** Straps, hooks or a cuff carry the hand, so that the grip does not. */
+  gripFree?: boolean
+}
+
+export interface Frame {
+  name: string
+  trunk: Trunk
+  arms: Arm
+  /** The idle arm of a one-sided exercise; hanging relaxed beside the trunk when left out. */
+  offArm?: Arm
+  legs: Leg
+  /** The idle leg of a one-sided exercise; like the working leg when left out. */
+  offLeg?: Leg
+}
+
+export interface Trunk {
+  /** Lean of the pelvis from upright, −180 to 180. The starting guess when `balance` solves it. */
+  lean: number
+  /** Flexion of the upper trunk against the pelvis; negative is extension. */
+  lumbar?: number
+  /** Flexion of the head against the upper trunk. */
+  neck?: number
+}
+
+/**
+ * An arm by its hand's place or by its joint angles.
+ * `hand` is [along p, along q] from the shoulder in the arm plane; with `from: world` (sagittal only) it is [x, z] in
+ * world axes. For a gripping hand the place is the middle of the grip, for a flat hand the wrist.
+ */
+export type Arm = (
+  | { hand: [number, number]; from?: 'trunk' | 'world'; /** Which way the elbow points. */ elbowSide?: 'flexed' | 'reversed' }
+  | { shoulder: number; elbow: number }
+) & {
+  /** Flexion of a gripping hand in the arm plane; negative is extension. */
+  wrist?: number
+  /** A hand flat on the ground, fingers along world +x (forward) or −x. */
+  flat?: 'forward' | 'backward'
+}
+
+/**
+ * A leg by its ankle's place or by its joint angles. `ankle` is [x, z] from the hip in world axes (`from: trunk`:
+ * [forward, up] of the pelvis). `knee` is flexion; `foot` is the sole's angle against the ground, toes down positive,
+ * with `from: world`; with joint angles `ankle` is plantarflexion from the right angle.
+ */
+export type Leg =
+  | { ankle: [number, number]; from?: 'world' | 'trunk'; foot?: number }
+  | { hip: number; knee: number; ankle?: number }
+
+/** The one angle or offset the engine solves in every frame so that the posture can be held. */
+export interface Balance {
+  /** trunk: lean of the whole trunk; arms: turn of the arms about the shoulders; feet: shift of the ankles under the hips. */
+  solve: 'trunk' | 'arms' | 'feet'
+  /** Search range in degrees (trunk, arms: change from the authored value) or fractions of stature (feet). */
+  range?: [number, number]
+  /** Where along the foot the pressure should lie, 0 heel to 1 toe tip. */
+  footPoint?: number
+}
+
+/** One way the external load L acts on the body; the force is ratio × L × g. */
+export interface LoadPath {
+  at: 'hands' | 'offHand' | 'shoulders' | 'hips' | 'feet' | 'head' | 'upperArm' | 'forearm' | 'thigh' | 'shank'
+  /** total: L is shared by both sides; each: L is carried by each side (a pair of dumbbells). */
+  share?: 'total' | 'each'
+  direction:
+    | 'down'
+    | 'up'
+    /** Degrees from world +x, counter-clockwise seen from the athlete's right (90 is up). */
+    | { angle: number }
+    /** Toward a pulley at [x, z] (world, × stature) from the hip, shoulder or ankle of this frame; `lateral` outward. */
+    | { toward: [number, number]; of: 'hip' | 'shoulder' | 'ankle'; lateral?: number }
+    /** Square to the segment named in `at`, in its own plane: `extending` pushes it toward extension. */
+    | { square: 'flexing' | 'extending' }
+  /** Pulley ratio or share of the load that acts (sled angle, lever). */
+  ratio?: number
+  /** Place along the segment from its upper end, 0–1, for pads; or offset [up, forward] in trunk axes for shoulders and hips. */
+  along?: number
+  offset?: [number, number]
+}
+
+/** A lever machine or cuff that loads one action directly: moment = L × g × arm × curve. */
+export interface DirectMoment {
+  /** The action that must answer the load. */
+  action: Action
+  /** Lever arm in fractions of stature. */
+  arm: number
+  ratio?: number
+  /** Factor per frame (resistance curve), 1 when left out. */
+  curve?: number[]
+  share?: 'total' | 'each'
+}
