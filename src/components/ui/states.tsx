@@ -1,0 +1,84 @@
+import type { UseQueryResult } from '@tanstack/react-query'
+import type { ReactNode } from 'react'
+import { ApiError } from '@/lib/api-error'
+import { cx } from '@/lib/cx'
+import { Button } from './button'
+
+/** A grey block the size of what will stand there. */
+export function Skeleton({ className }: { className?: string }) {
+  return <div aria-hidden className={cx('animate-pulse rounded-md bg-wash', className)} />
+}
+
+/** Blocks while something loads, and the words for those who do not see them. */
+export function Loading({ what, children }: { what: string; children?: ReactNode }) {
+  return (
+    <div role="status">
+      <span className="sr-only">Loading {what}</span>
+      {children ?? (
+        <div className="grid gap-3">
+          <Skeleton className="h-24" />
+          <Skeleton className="h-24" />
+          <Skeleton className="h-24" />
+        </div>
+      )}
+    </div>
+  )
+}
+
+/** Nothing here, in a sentence, and what can be done about it. */
+export function EmptyState({ title, children, action }: { title: string; children?: ReactNode; action?: ReactNode }) {
+  return (
+    <div className="rounded-xl border border-dashed border-edge px-6 py-8 text-center">
+      <p className="text-lg font-semibold">{title}</p>
+      {children !== undefined && <div className="mx-auto mt-1 max-w-prose text-pencil">{children}</div>}
+      {action !== undefined && <div className="mt-4 flex flex-wrap justify-center gap-3">{action}</div>}
+    </div>
+  )
+}
+
+/** What went wrong in a sentence, its code for whoever helps, and a way to try again. */
+export function FailureState({
+  error,
+  retry,
+  retrying = false,
+}: {
+  error: unknown
+  retry?: () => void
+  retrying?: boolean
+}) {
+  const known = error instanceof ApiError
+  return (
+    <div role="alert" className="rounded-xl border border-oxide bg-oxide-wash px-6 py-5">
+      <p className="font-semibold">{known ? error.message : 'Something went wrong on this page.'}</p>
+      <p className="text-pencil">
+        Code <code>{known ? error.code : 'page_error'}</code>
+        {known && error.requestId !== null && (
+          <>
+            , request <code className="break-all">{error.requestId}</code>
+          </>
+        )}
+      </p>
+      {retry !== undefined && (
+        <Button className="mt-3" onClick={retry} busy={retrying} busyLabel="Trying again">
+          Try again
+        </Button>
+      )}
+    </div>
+  )
+}
+
+interface LoadedProps<T> {
+  query: UseQueryResult<T>
+  /** What is loading, in words that follow “Loading”. */
+  what: string
+  skeleton?: ReactNode
+  children: (data: T) => ReactNode
+}
+
+/** The three states of every query: loading, failed, there. Older data stays in view when a later fetch fails. */
+export function Loaded<T>({ query, what, skeleton, children }: LoadedProps<T>) {
+  if (query.data !== undefined) return <>{children(query.data)}</>
+  if (query.isError)
+    return <FailureState error={query.error} retry={() => void query.refetch()} retrying={query.isFetching} />
+  return <Loading what={what}>{skeleton}</Loading>
+}

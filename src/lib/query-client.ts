@@ -1,0 +1,31 @@
+import { MutationCache, QueryCache, QueryClient } from '@tanstack/react-query'
+import { isApiError } from './api-error'
+
+/** Codes that a second try can mend. */
+const passing = (error: unknown) => isApiError(error, 'unreachable', 'unreadable', 'internal', 'unavailable')
+
+/**
+ * A write may change what the server computed for anything on screen (a sore joint changes today, the squad and every
+ * ranking), so each successful one makes everything stale; only what is on screen is fetched again.
+ */
+export function createQueryClient({ onSignedOut }: { onSignedOut: () => void }): QueryClient {
+  const signedOut = (error: unknown) => {
+    if (isApiError(error, 'not_signed_in', 'session_expired')) onSignedOut()
+  }
+  const client: QueryClient = new QueryClient({
+    queryCache: new QueryCache({ onError: signedOut }),
+    mutationCache: new MutationCache({
+      onError: signedOut,
+      onSuccess: () => {
+        void client.invalidateQueries()
+      },
+    }),
+    defaultOptions: {
+      queries: {
+        staleTime: 30_000,
+        retry: (failures, error) => failures < 2 && passing(error),
+      },
+    },
+  })
+  return client
+}
