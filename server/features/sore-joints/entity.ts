@@ -13,8 +13,14 @@ export type SoreJointState = (typeof SORE_JOINT_STATES)[number]
 @Entity({ name: 'sore_joints' })
 @Index('sore_joints_one_standing', { synchronize: false })
 @Index('sore_joints_history_idx', { synchronize: false })
-@Check('sore_joints_joint_check', "joint in ('neck', 'shoulder', 'elbow', 'wrist', 'lowerBack', 'hip', 'knee', 'ankle')")
-@Check('sore_joints_side_check', "case when joint in ('neck', 'lowerBack') then side is null else side is not null and side in ('left', 'right') end")
+@Check(
+  'sore_joints_joint_check',
+  "joint in ('neck', 'shoulder', 'elbow', 'wrist', 'lowerBack', 'hip', 'knee', 'ankle')",
+)
+@Check(
+  'sore_joints_side_check',
+  "case when joint in ('neck', 'lowerBack') then side is null else side is not null and side in ('left', 'right') end",
+)
 @Check('sore_joints_rating_check', 'rating between 0 and 10')
 @Check('sore_joints_state_check', "state in ('open', 'redFlag', 'closed')")
 @Check('sore_joints_closed_check', "(state = 'closed') = (closed_at is not null)")

@@ -1,0 +1,40 @@
+import type { EntityManager } from 'typeorm'
+import { notFound } from '../../errors'
+import type { Actor } from '../../middleware/scope'
+
+/** An athlete whom the actor may see, and in which capacity. */
+export interface AthleteAccess {
+  athleteId: string
+  name: string
+  /** It is the actor. */
+  self: boolean
+  /** The actor coaches them, or is their physio, in a club both belong to, and their consent stands. */
+  coach: boolean
+  physio: boolean
+}
+
+/**
+ * The one gate to another person's data: the athlete themselves, or a coach or physio of one of their clubs while
+ * consent stands. For everyone else the athlete is simply not found. One query.
+ */
+export async function requireAthlete(manager: EntityManager, actor: Actor, athleteId: string): Promise<AthleteAccess> {
+  const rows: Array<{ name: string; roles: string[] }> = await manager.query(
+    `select u.name,
+            array(
+              select distinct carer.role
+                from consents c
+                join memberships carer on carer.user_id = c.carer_id and carer.role in ('coach', 'physio')
+                join memberships athlete
+                  on athlete.user_id = c.athlete_id and athlete.club_id = carer.club_id and athlete.role = 'athlete'
+               where c.athlete_id = u.id and c.carer_id = $2 and c.revoked_at is null
+            ) as roles
+       from users u
+      where u.id = $1
+        and exists (select 1 from memberships m where m.user_id = u.id and m.role = 'athlete')`,
+    [athleteId, actor.userId],
+  )
+  const row = rows[0]
+  const self = actor.userId === athleteId
+  if (row === undefined || (!self && row.roles.length === 0)) throw notFound('That athlete')
+  return { athleteId, name: row.name, self, coach: row.roles.includes('coach'), physio: row.roles.includes('physio') }
+}
