@@ -4,6 +4,7 @@ import type { Dose, Intent } from '../contract/session'
 import type { Provocation, RedFlag } from '../contract/sore-joint'
 import type { LeftOutRow, SwapRow, Ranking } from '../contract/swap'
 import type { Action, Joint, Side } from '../mechanics/vocabulary'
+import type { ExerciseMechanics } from '../mechanics/definition'
 import type { ExerciseSolution } from '../mechanics/solution'
 import type { Sex } from '../mechanics/sex'
 import type { Muscle, TargetGroup } from './muscle-names'
@@ -40,12 +41,26 @@ export interface SoreJointInput {
   redFlags: readonly RedFlag[]
 }
 
-/** The largest stress allowed at one action (share of strength), and whose word it is. */
+/**
+ * One way a joint is loaded: a signed action, or a load that is no action: the pull of gripping at the elbow,
+ * weight leaned on the joint, or work at the end of its range.
+ */
+export type StressChannel = Action | 'gripPull' | 'leaning' | 'endRange'
+
+/** The largest stress allowed at one channel of a joint (share of strength), and whose word it is. */
 export interface Cap {
-  action: Action
+  joint: Joint
+  channel: StressChannel
   side: Side | null
   limit: number
   source: { kind: 'soreJoint'; soreJointId: string; joint: Joint }
+}
+
+/** What mechanics says of an exercise, without its name and equipment: enough for a preview. */
+export interface Movement {
+  mechanics: ExerciseMechanics
+  solution: ExerciseSolution
+  coordination: number
 }
 
 export interface Place {

@@ -1,0 +1,14 @@
+/**
+ * The rules: strength, caps, joint stress, coordination, dose and ranking. Pure; the rule set and everything else
+ * come in as arguments. The only door of this folder.
+ */
+export { strengths } from './strength'
+export { capsFromSoreness } from './caps'
+export { coordinationDemand } from './coordination'
+export { affectedBy, type Affected } from './affected'
+export { previewOf } from './preview'
+export { musclesOf } from './muscles'
+export { roundToSteps } from './load-steps'
+export { rank } from './rank'
+export { averageAdult } from './average-adult'
+export type * from './types'
