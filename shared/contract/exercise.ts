@@ -14,7 +14,7 @@ const fraction = z.number().min(-3).max(3)
 const pair = z.tuple([fraction, fraction])
 
 const arm = z
-  .object({
+  .strictObject({
     hand: pair.optional(),
     from: z.enum(['trunk', 'world']).optional(),
     elbowSide: z.enum(['flexed', 'reversed']).optional(),
@@ -23,23 +23,28 @@ const arm = z
     wrist: z.number().min(-90).max(90).optional(),
     flat: z.enum(['forward', 'backward']).optional(),
   })
-  .strict()
   .refine(
     (value) => (value.hand !== undefined) !== (value.shoulder !== undefined && value.elbow !== undefined),
     'Give either the hand’s place, or the shoulder and elbow angles.',
   )
 const leg = z
-  .object({
+  .strictObject({
     ankle: z.union([pair, angle]).optional(),
     from: z.enum(['trunk', 'world']).optional(),
     foot: angle.optional(),
+    thigh: angle.optional(),
+    shank: angle.optional(),
     hip: angle.optional(),
     knee: angle.optional(),
   })
-  .strict()
   .refine(
-    (value) => Array.isArray(value.ankle) !== (value.hip !== undefined && value.knee !== undefined),
-    'Give either the ankle’s place, or the hip and knee angles.',
+    (value) =>
+      [
+        Array.isArray(value.ankle),
+        value.thigh !== undefined && value.shank !== undefined,
+        value.hip !== undefined && value.knee !== undefined,
+      ].filter(Boolean).length === 1,
+    'Give the ankle’s place, or the thigh and shank angles, or the hip and knee angles.',
   )
 const frame = z.strictObject({
   name: z.string().min(1).max(40),
@@ -86,8 +91,8 @@ export const exerciseMechanics = z.strictObject({
   frames: z.array(frame).min(2, 'Give at least two postures.').max(4, 'Give at most four postures.'),
   balance: z
     .strictObject({
-      solve: z.enum(['trunk', 'arms', 'feet']),
-      range: pair.or(z.tuple([angle, angle])).optional(),
+      solve: z.enum(['trunk', 'arms', 'legs']),
+      range: z.tuple([angle, angle]).optional(),
       footPoint: z.number().min(0).max(1).optional(),
     })
     .optional(),

@@ -21,7 +21,7 @@ export interface ExerciseMechanics {
   gripWidth: GripWidth
   armPlane: ArmPlane
   supports: Support[]
-  /** Height of the hands' (or forearms', upper back's) bearing above the feet's (or knees') when both bear. */
+  /** Height of the first support above the second when two bear (a hand on a low bar, a foot on a bench), × stature. */
   rise?: number
   /** Two to four postures through the repetition, in order. */
   frames: Frame[]
@@ -56,33 +56,37 @@ export interface Trunk {
 
 /**
  * An arm by its hand's place or by its joint angles.
- * `hand` is [along p, along q] from the shoulder in the arm plane; with `from: world` (sagittal only) it is [x, z] in
- * world axes. For a gripping hand the place is the middle of the grip, for a flat hand the wrist.
+ * `hand` is [along p, along q] from the shoulder in the arm plane. With `from: world` it is [x, z] for sagittal arms and
+ * [outward, z] for the others, whose plane then stands upright through both shoulders. For a gripping hand the place is
+ * the middle of the grip, for a flat hand the wrist.
  */
-export type Arm = (
-  | { hand: [number, number]; from?: 'trunk' | 'world'; /** Which way the elbow points. */ elbowSide?: 'flexed' | 'reversed' }
-  | { shoulder: number; elbow: number }
-) & {
-  /** Flexion of a gripping hand in the arm plane; negative is extension. */
+export type Arm = ({ hand: [number, number]; from?: 'trunk' | 'world' } | { shoulder: number; elbow: number }) & {
+  /** `reversed` folds the forearm the other way round in the arm plane (a forearm hanging from an abducted arm). */
+  elbowSide?: 'flexed' | 'reversed'
+  /** Bend of a gripping hand in the arm plane: flexion, or radial deviation where that is what the plane allows. */
   wrist?: number
   /** A hand flat on the ground, fingers along world +x (forward) or −x. */
   flat?: 'forward' | 'backward'
 }
 
 /**
- * A leg by its ankle's place or by its joint angles. `ankle` is [x, z] from the hip in world axes (`from: trunk`:
- * [forward, up] of the pelvis). `knee` is flexion; `foot` is the sole's angle against the ground, toes down positive,
- * with `from: world`; with joint angles `ankle` is plantarflexion from the right angle.
+ * A leg by its ankle's place, by its segments' world angles or by its joint angles.
+ * `ankle` as a pair is [x, z] from the hip in world axes (`from: trunk`: [forward, up] of the pelvis).
+ * `thigh` and `shank` are world angles: 0 points straight down, positive swings the lower end forward.
+ * `hip`, `knee` and `ankle` as numbers are flexion, flexion and plantarflexion from the right angle.
+ * `foot` is the sole's world angle, toes down positive; flat (0) when left out, except that with joint angles the
+ * ankle angle (0 when left out) decides unless `foot` is given.
  */
 export type Leg =
   | { ankle: [number, number]; from?: 'world' | 'trunk'; foot?: number }
-  | { hip: number; knee: number; ankle?: number }
+  | { thigh: number; shank: number; foot?: number }
+  | { hip: number; knee: number; ankle?: number; foot?: number }
 
-/** The one angle or offset the engine solves in every frame so that the posture can be held. */
+/** The one angle the engine solves in every frame so that the posture can be held. */
 export interface Balance {
-  /** trunk: lean of the whole trunk; arms: turn of the arms about the shoulders; feet: shift of the ankles under the hips. */
-  solve: 'trunk' | 'arms' | 'feet'
-  /** Search range in degrees (trunk, arms: change from the authored value) or fractions of stature (feet). */
+  /** trunk: lean of the trunk; arms: turn of the arms about the shoulders; legs: turn of the legs about the hips. */
+  solve: 'trunk' | 'arms' | 'legs'
+  /** Search range as change from the authored posture, degrees; ±60 when left out. */
   range?: [number, number]
   /** Where along the foot the pressure should lie, 0 heel to 1 toe tip. */
   footPoint?: number

@@ -47,14 +47,19 @@ export interface Term {
   b: number
 }
 
-export const POINTS = [
-  'pelvis',
-  'lumbar',
-  'neckBase',
-  'headCentre',
-  'headTop',
+export const POINTS = ['pelvis', 'lumbar', 'neckBase', 'headCentre', 'headTop'] as const
+export const SIDE_POINTS = [
+  'shoulder',
+  'elbow',
+  'wrist',
+  'grip',
+  'fingers',
+  'hip',
+  'knee',
+  'ankle',
+  'heel',
+  'toe',
 ] as const
-export const SIDE_POINTS = ['shoulder', 'elbow', 'wrist', 'grip', 'fingers', 'hip', 'knee', 'ankle', 'heel', 'toe'] as const
 export type PointName = (typeof POINTS)[number] | `${Side}.${(typeof SIDE_POINTS)[number]}`
 
 /** Joint positions in stature fractions. The lowest bearing point, or else the lowest point, lies at z = 0. */

@@ -100,7 +100,10 @@ export const ACTION_JOINT: Readonly<Record<Action, Joint>> = {
 export const GUIDANCES = ['fixedPath', 'leverMachine', 'cable', 'freeWeight', 'ownBody', 'ownBodyOnStraps'] as const
 export type Guidance = (typeof GUIDANCES)[number]
 
-/** Where the body bears. The first six can be solved from statics; the rest only hold what rests on them. */
+/**
+ * Where the body bears. The first eight can be solved from statics; the rest only hold what rests on them.
+ * `offHand` and `offFoot` are the idle hand and foot of a one-sided exercise bearing weight.
+ */
 export const SUPPORTS = [
   'handsHanging',
   'handsPushing',
@@ -108,6 +111,8 @@ export const SUPPORTS = [
   'feet',
   'knees',
   'upperBack',
+  'offHand',
+  'offFoot',
   'seat',
   'backPad',
   'chestPad',

@@ -1,0 +1,133 @@
+import type { LimbIndex, SegmentRef } from './bodies'
+import type { ExerciseMechanics } from './definition'
+import { MechanicsError } from './errors'
+import type { SolvedLeg } from './limbs'
+import type { Posture } from './posture'
+import type { Vector } from './solution'
+import { between } from './vector'
+import type { Support } from './vocabulary'
+
+/** Supports whose reaction statics can find; all others only hold what rests on them. */
+const SOLVABLE: readonly Support[] = [
+  'handsHanging',
+  'handsPushing',
+  'forearms',
+  'feet',
+  'knees',
+  'upperBack',
+  'offHand',
+  'offFoot',
+]
+
+const RESTING: Partial<Record<Support, SegmentRef['name'][]>> = {
+  seat: ['pelvis', 'thigh'],
+  backPad: ['upperTrunk', 'head'],
+  chestPad: ['upperTrunk'],
+  thighPad: ['thigh'],
+  armPad: ['upperArm'],
+  forearmPad: ['forearm'],
+  shankPad: ['shank'],
+}
+
+/** One place where the body bears, on one segment. */
+export interface Contact {
+  support: Support
+  segment: SegmentRef
+  at: Vector
+}
+
+/** All contacts of one support; their reactions are equal. */
+export interface ContactGroup {
+  support: Support
+  contacts: Contact[]
+}
+
+/** Pressure centre of a foot flat on the ground, share of its length from the heel (quiet standing; from memory, medium). */
+const MID_FOOT = 0.45
+/** Ball of the foot, share of its length from the heel (from memory, medium). */
+const BALL = 0.78
+/** A sole steeper than this stands on the ball or the heel. */
+const STEEP = 25
+/** Where along the forearm a plank bears, from the elbow (our estimate). */
+const FOREARM_BEARING = 0.2
+/** Where along the upper trunk a bench edge bears, from L5/S1 (the lower shoulder blade; our estimate). */
+const UPPER_BACK_BEARING = 0.75
+
+/** Where a foot bears, given how its sole lies. */
+function footContact(leg: SolvedLeg, footPoint: number | undefined): Vector {
+  if (leg.soleAngle > STEEP) return between(leg.heel, leg.toe, BALL)
+  if (leg.soleAngle < -STEEP) return leg.heel
+  return between(leg.heel, leg.toe, footPoint ?? MID_FOOT)
+}
+
+/** Whether any support of the exercise is a pad or seat, which holds an unknown share. */
+export const rests = (mechanics: ExerciseMechanics): boolean =>
+  mechanics.supports.some((support) => !SOLVABLE.includes(support))
+
+/** Segments whose load on a pad, or on a contact beside a pad, cannot be told from statics. */
+export function restingSegments(mechanics: ExerciseMechanics): (segment: SegmentRef) => boolean {
+  if (!rests(mechanics)) return () => false
+  const groups = mechanics.supports.map((support): ((segment: SegmentRef) => boolean) => {
+    const names = RESTING[support]
+    if (names) return (segment) => names.includes(segment.name)
+    const limbs = bearingLimbs(mechanics, support)
+    const name = BEARING_SEGMENT[support as keyof typeof BEARING_SEGMENT]
+    return (segment) => segment.name === name && (segment.limb === undefined || limbs.includes(segment.limb))
+  })
+  return (segment) => groups.some((rest) => rest(segment))
+}
+
+const BEARING_SEGMENT = {
+  handsHanging: 'hand',
+  handsPushing: 'hand',
+  forearms: 'forearm',
+  feet: 'foot',
+  knees: 'shank',
+  upperBack: 'upperTrunk',
+  offHand: 'hand',
+  offFoot: 'foot',
+} as const
+
+/** Which limbs of a support bear: both, unless the exercise is one-sided and the idle limb has a posture of its own. */
+function bearingLimbs(mechanics: ExerciseMechanics, support: Support): LimbIndex[] {
+  if (support === 'offHand' || support === 'offFoot') return [1]
+  if (mechanics.sides === 'both') return [0, 1]
+  const hands = support === 'handsHanging' || support === 'handsPushing' || support === 'forearms'
+  if (hands) return [0]
+  const ownLeg = mechanics.frames.some((frame) => frame.offLeg !== undefined)
+  return ownLeg ? [0] : [0, 1]
+}
+
+/**
+ * The contacts whose reactions statics must find; empty when the body rests on a seat or pad.
+ * @throws MechanicsError unsupported_combination with more than two groups of contacts
+ */
+export function contactGroups(mechanics: ExerciseMechanics, posture: Posture): ContactGroup[] {
+  if (rests(mechanics)) return []
+  if (mechanics.supports.length > 2) {
+    throw new MechanicsError(
+      'unsupported_combination',
+      'supports',
+      'Statics can share weight between two supports at most.',
+    )
+  }
+  return mechanics.supports.map((support) => ({
+    support,
+    contacts: bearingLimbs(mechanics, support).map((limb): Contact => {
+      const arm = posture.arms[limb]
+      const leg = posture.legs[limb]
+      const point = {
+        handsHanging: arm.grip,
+        handsPushing: arm.grip,
+        offHand: arm.grip,
+        forearms: between(arm.elbow, arm.wrist, FOREARM_BEARING),
+        feet: footContact(leg, mechanics.balance?.footPoint),
+        offFoot: footContact(leg, mechanics.balance?.footPoint),
+        knees: leg.knee,
+        upperBack: between(posture.lumbar, posture.neckBase, UPPER_BACK_BEARING),
+      }[support as keyof typeof BEARING_SEGMENT]
+      const name = BEARING_SEGMENT[support as keyof typeof BEARING_SEGMENT]
+      return { support, at: point, segment: name === 'upperTrunk' ? { name } : { name, limb } }
+    }),
+  }))
+}

@@ -1,0 +1,94 @@
+import { isDistal, type CutName, type LimbIndex, type SegmentRef } from './bodies'
+import type { ContactGroup } from './contacts'
+import type { ExerciseMechanics } from './definition'
+import type { Force } from './loads'
+import type { Vector } from './solution'
+import { add, cross, mean, scale, subtract, ZERO } from './vector'
+
+/** Sum of forces and of their moments about a point. */
+export function wrench(forces: readonly Force[], about: Vector): { force: Vector; moment: Vector } {
+  let force: Vector = ZERO
+  let moment: Vector = ZERO
+  for (const each of forces) {
+    force = add(force, each.force)
+    moment = add(moment, cross(subtract(each.at, about), each.force))
+    if (each.couple) moment = add(moment, each.couple)
+  }
+  return { force, moment }
+}
+
+/** A reaction on one group, split evenly over its contacts; `couple` is what one point of bearing cannot take alone. */
+function onGroup(group: ContactGroup, total: Vector, couple: Vector): Force[] {
+  const share = 1 / group.contacts.length
+  return group.contacts.map((contact) => ({
+    segment: contact.segment,
+    at: contact.at,
+    force: scale(total, share),
+    couple: scale(couple, share),
+  }))
+}
+
+/** The middle of a group's contacts. */
+export const groupCentre = (group: ContactGroup): Vector => mean(group.contacts.map((contact) => contact.at))
+
+/**
+ * Support reactions that hold the given forces, linear in them.
+ *
+ * One group takes the whole force and, as a couple, the offset of the pressure centre from its contact. Of two groups
+ * each takes an upright force so that forces and moments in the sagittal plane balance; sideways pull and
+ * what is left of the moments go to the second. No group: the body rests on pads and nothing is solved.
+ */
+export function reactions(groups: readonly ContactGroup[], applied: readonly Force[]): Force[] {
+  const [first, second] = groups
+  if (first === undefined) return []
+  if (second === undefined) {
+    const centre = groupCentre(first)
+    const { force, moment } = wrench(applied, centre)
+    return onGroup(first, scale(force, -1), scale(moment, -1))
+  }
+  const a = groupCentre(first)
+  const b = groupCentre(second)
+  const about = wrench(applied, b)
+  // Moment of an upright unit force at a about b, around the lateral axis.
+  const lever = cross(subtract(a, b), [0, 0, 1])[1]
+  const upright: Vector = [0, 0, -about.moment[1] / lever]
+  const onFirst = onGroup(first, upright, ZERO)
+  const rest = wrench([...applied, ...onFirst], b)
+  return [...onFirst, ...onGroup(second, scale(rest.force, -1), scale(rest.moment, -1))]
+}
+
+/**
+ * Net external force and moment on the distal side of a cut, about a point, taken from the side without an unknown pad.
+ * Undefined when pads hold both sides: then nothing can be said, and nothing is asked of the joint.
+ */
+export function cutWrench(
+  all: readonly Force[],
+  restsOn: (segment: SegmentRef) => boolean,
+  segments: readonly SegmentRef[],
+  cut: { name: CutName; limb?: LimbIndex; at: Vector },
+): { force: Vector; moment: Vector } | undefined {
+  const distal = (segment: SegmentRef) => isDistal(segment, cut.name, cut.limb)
+  const heldDistally = segments.some((segment) => restsOn(segment) && distal(segment))
+  const heldProximally = segments.some((segment) => restsOn(segment) && !distal(segment))
+  if (heldDistally && heldProximally) return undefined
+  const side = all.filter((force) => distal(force.segment) !== heldDistally)
+  const sum = wrench(side, cut.at)
+  return heldDistally ? { force: scale(sum.force, -1), moment: scale(sum.moment, -1) } : sum
+}
+
+/** Combined forces at the reference load, in units of body weight. */
+export const atReference = (mechanics: ExerciseMechanics, body: readonly Force[], load: readonly Force[]): Force[] => [
+  ...body,
+  ...load.map((each) => ({
+    ...each,
+    force: scale(each.force, mechanics.referenceLoad),
+    ...(each.couple ? { couple: scale(each.couple, mechanics.referenceLoad) } : {}),
+  })),
+]
+
+/** How far forward of `target` the pressure centre lies at a horizontal level through it, in stature fractions. */
+export function pressureOffset(applied: readonly Force[], target: Vector): number {
+  const { force, moment } = wrench(applied, target)
+  // The reaction −F at offset d makes the moment d·F_z about the lateral axis, which must undo the applied one.
+  return -moment[1] / force[2]
+}
