@@ -15,7 +15,7 @@ const pair = z.tuple([fraction, fraction])
 
 const arm = z
   .strictObject({
-    hand: pair.optional(),
+    hand: z.union([pair, z.tuple([fraction, fraction, fraction])]).optional(),
     from: z.enum(['trunk', 'world']).optional(),
     elbowSide: z.enum(['flexed', 'reversed']).optional(),
     shoulder: angle.optional(),

@@ -18,11 +18,11 @@ const STEP = 3
 
 function turnArm(arm: Arm, by: number): Arm {
   if ('hand' in arm && arm.hand !== undefined) {
-    const [u, v] = arm.hand
+    const [u, v, ...ahead] = arm.hand
     const c = Math.cos(radians(by))
     const s = Math.sin(radians(by))
     // One turn serves every form of a place: [along p, along q] as well as [outward or forward, up].
-    return { ...arm, hand: [u * c - v * s, u * s + v * c] }
+    return { ...arm, hand: [u * c - v * s, u * s + v * c, ...ahead] as typeof arm.hand }
   }
   return { ...arm, shoulder: (arm as { shoulder: number }).shoulder + by }
 }

@@ -57,10 +57,13 @@ export interface Trunk {
 /**
  * An arm by its hand's place or by its joint angles.
  * `hand` is [along p, along q] from the shoulder in the arm plane. With `from: world` it is [x, z] for sagittal arms and
- * [outward, z] for the others, whose plane then stands upright through both shoulders. For a gripping hand the place is
+ * [outward, z] or [outward, z, x] for the others: their plane then holds both shoulders and both hands, and stands upright
+ * when x is left out. For a gripping hand the place is
  * the middle of the grip, for a flat hand the wrist.
  */
-export type Arm = ({ hand: [number, number]; from?: 'trunk' | 'world' } | { shoulder: number; elbow: number }) & {
+export type Arm = (
+  { hand: [number, number] | [number, number, number]; from?: 'trunk' | 'world' } | { shoulder: number; elbow: number }
+) & {
   /** `reversed` folds the forearm the other way round in the arm plane (a forearm hanging from an abducted arm). */
   elbowSide?: 'flexed' | 'reversed'
   /** Bend of a gripping hand in the arm plane: flexion, or radial deviation where that is what the plane allows. */

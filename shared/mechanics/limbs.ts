@@ -26,13 +26,15 @@ export function armPlaneAxes(plane: ArmPlane, trunk: TrunkAxes): { p: Vector; q:
 }
 
 /**
- * The same planes turned upright for hands placed in world axes: frontal and transverse arms then move in the upright plane
- * through both shoulders, as under a bar, over the floor or along a vertical cable, whatever the trunk's lean.
+ * The plane of a hand placed in world axes: for frontal and transverse arms it holds the lateral direction and the line from the
+ * shoulder down (or up) to the hand, upright unless the hand lies ahead of or behind the shoulder.
  */
-function worldPlaneAxes(plane: ArmPlane, trunk: TrunkAxes): { p: Vector; q: Vector } {
+function worldPlaneAxes(plane: ArmPlane, trunk: TrunkAxes, [, z, x = 0]: readonly number[]): { p: Vector; q: Vector } {
   if (plane === 'sagittal') return armPlaneAxes(plane, trunk)
-  if (plane === 'frontal') return { p: [0, 0, -1], q: trunk.lateral }
-  return { p: trunk.lateral, q: [0, 0, trunk.forward[2] < 0 ? -1 : 1] }
+  const line: Vector = x === 0 ? [0, 0, 1] : unit([x, 0, z ?? 0])
+  const along = (wanted: Vector): Vector => scale(line, dot(line, wanted) < 0 ? -1 : 1)
+  if (plane === 'frontal') return { p: along([0, 0, -1]), q: trunk.lateral }
+  return { p: trunk.lateral, q: along(trunk.forward) }
 }
 
 /**
@@ -108,7 +110,9 @@ export function solveArm(
 ): SolvedArm {
   const { table, field } = setting
   const plane =
-    'hand' in arm && arm.from === 'world' ? worldPlaneAxes(setting.plane, trunk) : armPlaneAxes(setting.plane, trunk)
+    'hand' in arm && arm.from === 'world'
+      ? worldPlaneAxes(setting.plane, trunk, arm.hand)
+      : armPlaneAxes(setting.plane, trunk)
   const elbowSign = arm.elbowSide === 'reversed' ? -1 : 1
   const wristSign = WRIST_IN_PLANE[setting.plane][setting.grip === 'none' ? 'neutral' : setting.grip].sign
   const bend = arm.flat === undefined ? wristSign * radians(arm.wrist ?? 0) : 0
@@ -122,8 +126,8 @@ export function solveArm(
   let upper: number
   let lower: number
   if ('hand' in arm && arm.hand !== undefined) {
-    const [u, v] = arm.hand
-    const target = setting.plane === 'sagittal' ? ([u, 0, v] as Vector) : add(scale(trunk.lateral, u), [0, 0, v])
+    const [u, v, x = 0] = arm.hand
+    const target = setting.plane === 'sagittal' ? ([u, 0, v] as Vector) : add(scale(trunk.lateral, u), [x, 0, v])
     const place: [number, number] = arm.from === 'world' ? [dot(target, plane.p), dot(target, plane.q)] : [u, v]
     const { fold, atFirst } = foldAngle(
       { first: table.upperArm.length, second },
