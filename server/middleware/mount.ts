@@ -11,7 +11,12 @@ export interface HttpContext {
   requestId: string
 }
 
-type Answer<E> = ResponseOf<E> extends undefined ? void : ResponseOf<E>
+/** An answer that was turned into JSON before, and is sent as those very bytes. */
+export class Serialized {
+  constructor(readonly json: Buffer) {}
+}
+
+type Answer<E> = ResponseOf<E> extends undefined ? void : ResponseOf<E> | Serialized
 type Handler<E, Who> = (input: Received<E> & { actor: Who; context: HttpContext }) => Promise<Answer<E>> | Answer<E>
 
 const route = (router: Router, endpoint: Endpoint, handlers: RequestHandler[]) => {
@@ -52,9 +57,12 @@ async function run<E extends Endpoint, Who>(
   } as Received<E>
   const context = { request, response, requestId: scope.requestId }
   const answer = await handler({ ...received, actor, context })
-  if (scope.checkAnswers) checkAnswer(endpoint, answer)
+  if (scope.checkAnswers) {
+    checkAnswer(endpoint, answer instanceof Serialized ? JSON.parse(answer.json.toString('utf8')) : answer)
+  }
   response.status(endpoint.status ?? (endpoint.response === undefined ? 204 : 200))
   if (endpoint.response === undefined) response.end()
+  else if (answer instanceof Serialized) response.type('json').send(answer.json)
   else response.json(answer)
 }
 

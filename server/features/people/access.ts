@@ -13,21 +13,24 @@ export interface AthleteAccess {
   physio: boolean
 }
 
+/** SQL for the capacities in which `actor` looks after `athlete` (both SQL expressions) while consent stands. */
+export const carerRoles = (athlete: string, actor: string): string => `
+            array(
+              select distinct carer.role
+                from consents c
+                join memberships carer on carer.user_id = c.carer_id and carer.role in ('coach', 'physio')
+                join memberships trained
+                  on trained.user_id = c.athlete_id and trained.club_id = carer.club_id and trained.role = 'athlete'
+               where c.athlete_id = ${athlete} and c.carer_id = ${actor} and c.revoked_at is null
+            )`
+
 /**
  * The one gate to another person's data: the athlete themselves, or a coach or physio of one of their clubs while
  * consent stands. For everyone else the athlete is simply not found. One query.
  */
 export async function requireAthlete(manager: EntityManager, actor: Actor, athleteId: string): Promise<AthleteAccess> {
   const rows: Array<{ name: string; roles: string[] }> = await manager.query(
-    `select u.name,
-            array(
-              select distinct carer.role
-                from consents c
-                join memberships carer on carer.user_id = c.carer_id and carer.role in ('coach', 'physio')
-                join memberships athlete
-                  on athlete.user_id = c.athlete_id and athlete.club_id = carer.club_id and athlete.role = 'athlete'
-               where c.athlete_id = u.id and c.carer_id = $2 and c.revoked_at is null
-            ) as roles
+    `select u.name, ${carerRoles('u.id', '$2')} as roles
        from users u
       where u.id = $1
         and exists (select 1 from memberships m where m.user_id = u.id and m.role = 'athlete')`,
