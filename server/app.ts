@@ -4,6 +4,9 @@ import express, { type Express, type Router } from 'express'
 import helmet from 'helmet'
 import type { Dependencies } from './dependencies'
 import { AppError } from './errors'
+import { auditRoutes } from './features/audit/routes'
+import { authRoutes } from './features/auth/routes'
+import { meRoutes } from './features/me/routes'
 import { authenticate } from './middleware/authenticate'
 import { readBody } from './middleware/body'
 import { serveClient } from './middleware/client'
@@ -15,7 +18,7 @@ import { setScope } from './middleware/scope'
 import { openApiRoutes } from './openapi'
 
 /** Every feature's routes; a feature is not served until it is named here. */
-const FEATURES: Array<(dependencies: Dependencies) => Router> = []
+const FEATURES: Array<(dependencies: Dependencies) => Router> = [authRoutes, meRoutes, auditRoutes]
 
 const CONTENT_SECURITY_POLICY = {
   useDefaults: false,

@@ -1,34 +1,31 @@
 import type { z } from 'zod'
 import { AppError } from '../errors'
 
-/** An opaque place in a list: the sort key of the last row that was sent. */
-export const encodeCursor = (key: readonly unknown[]): string => Buffer.from(JSON.stringify(key)).toString('base64url')
-
-/** Reads a cursor back. Throws `invalid_request` for anything this server did not make for this list. */
-export function decodeCursor<T extends z.ZodType>(cursor: string | undefined, schema: T): z.output<T> | null {
+/** The sort values of the cursor, or null without one. Throws `invalid_request` for one that this list did not hand out. */
+export function decodeCursor<Key extends string[]>(cursor: string | undefined, key: z.ZodType<Key>): Key | null {
   if (cursor === undefined) return null
-  const parsed = schema.safeParse(parseJson(Buffer.from(cursor, 'base64url').toString('utf8')))
-  if (parsed.success) return parsed.data
-  throw new AppError('invalid_request', 'Some of what was sent cannot be used.', [
-    { path: 'cursor', message: 'This cursor does not belong to this list. Start again without it.' },
+  try {
+    const parsed = key.safeParse(JSON.parse(Buffer.from(cursor, 'base64url').toString('utf8')))
+    if (parsed.success) return parsed.data
+  } catch {
+    // Falls through to the one answer for every broken cursor.
+  }
+  throw new AppError('invalid_request', 'This place in the list is not known.', [
+    { path: 'cursor', message: 'Start from the first page again.' },
   ])
 }
 
-function parseJson(text: string): unknown {
-  try {
-    return JSON.parse(text)
-  } catch {
-    return undefined
-  }
-}
-
-/** Cuts the one row too many that a page query asks for, and says where the next page starts. */
+/**
+ * Cuts what was found to a page. Ask the database for `limit + 1` rows: the one too many tells that there is a next page.
+ * `key` gives the sort values of a row, which the cursor carries opaquely.
+ */
 export function toPage<Row>(
-  rows: readonly Row[],
+  found: readonly Row[],
   limit: number,
-  key: (row: Row) => readonly unknown[],
+  key: (row: Row) => string[],
 ): { rows: Row[]; nextCursor: string | null } {
-  const kept = rows.slice(0, limit)
-  const last = kept.at(-1)
-  return { rows: kept, nextCursor: rows.length > limit && last !== undefined ? encodeCursor(key(last)) : null }
+  const rows = found.slice(0, limit)
+  const last = rows.at(-1)
+  const more = found.length > limit && last !== undefined
+  return { rows, nextCursor: more ? Buffer.from(JSON.stringify(key(last))).toString('base64url') : null }
 }

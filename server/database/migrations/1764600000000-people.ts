@@ -30,7 +30,7 @@ export class People1764600000000 implements MigrationInterface {
       `CREATE UNIQUE INDEX "consents_standing_key" ON "consents"  ("athlete_id", "carer_id") WHERE revoked_at is null`,
     )
     await runner.query(
-      `CREATE TABLE "audit_entries" ("id" uuid NOT NULL DEFAULT gen_random_uuid(), "at" TIMESTAMP WITH TIME ZONE NOT NULL DEFAULT clock_timestamp(), "actor_id" uuid, "action" text NOT NULL, "subject_id" uuid, "club_ids" uuid array NOT NULL, "details" jsonb NOT NULL DEFAULT '{}', CONSTRAINT "PK_6b1623bcad4d04530b76548d619" PRIMARY KEY ("id"))`,
+      `CREATE TABLE "audit_entries" ("id" uuid NOT NULL DEFAULT gen_random_uuid(), "at" TIMESTAMP(3) WITH TIME ZONE NOT NULL DEFAULT clock_timestamp(), "actor_id" uuid, "action" text NOT NULL, "subject_id" uuid, "club_ids" uuid array NOT NULL, "details" jsonb NOT NULL DEFAULT '{}', CONSTRAINT "PK_6b1623bcad4d04530b76548d619" PRIMARY KEY ("id"))`,
     )
     await runner.query(`CREATE INDEX "audit_entries_subject_id_idx" ON "audit_entries"  ("subject_id") `)
     await runner.query(`CREATE INDEX "audit_entries_at_id_idx" ON "audit_entries"  ("at", "id") `)

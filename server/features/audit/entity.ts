@@ -9,7 +9,7 @@ export class AuditEntry {
   @PrimaryGeneratedColumn('uuid')
   id!: string
 
-  @Column({ type: 'timestamptz', default: () => 'clock_timestamp()' })
+  @Column({ type: 'timestamptz', precision: 3, default: () => 'clock_timestamp()' })
   at!: Date
 
   @Column({ name: 'actor_id', type: 'uuid', nullable: true })

@@ -3,6 +3,7 @@ import {
   Column,
   CreateDateColumn,
   Entity,
+  ForeignKey,
   Index,
   JoinColumn,
   ManyToOne,
@@ -16,6 +17,7 @@ import type { Role } from '#shared/contract/me'
 import type { Action } from '#shared/mechanics/vocabulary'
 import type { Sex } from '#shared/mechanics/sex'
 import type { ExerciseDocument } from '#shared/contract/exercise'
+import { Place } from '../places/entity'
 
 @Entity({ name: 'clubs' })
 export class Club {
@@ -49,6 +51,7 @@ export class User {
   @Column({ type: 'text', default: 'metric' })
   units!: 'metric' | 'imperial'
 
+  @ForeignKey(() => Place, { name: 'users_default_place_id_fkey', onDelete: 'SET NULL' })
   @Column({ name: 'default_place_id', type: 'uuid', nullable: true })
   defaultPlaceId!: string | null
 
