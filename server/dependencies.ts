@@ -3,6 +3,7 @@ import type { DataSource } from 'typeorm'
 import { Background } from './background'
 import { createDataSource } from './database/data-source'
 import type { Env } from './env'
+import { Catalogue } from './features/exercises/catalogue'
 import { createLogger } from './logger'
 import { createMailer, type Mailer } from './mail/mailer'
 
@@ -20,6 +21,8 @@ export interface Dependencies {
   logger: Logger
   /** Work that goes on after the answer was sent; awaited at shutdown. */
   background: Background
+  /** The published exercises and the active rules. */
+  catalogue: Catalogue
 }
 
 export const systemClock: Clock = { now: () => new Date() }
@@ -36,5 +39,6 @@ export async function createDependencies(env: Env, given: Partial<Dependencies> 
     mailer: given.mailer ?? createMailer(env),
     clock: given.clock ?? systemClock,
     background: given.background ?? new Background(logger),
+    catalogue: given.catalogue ?? new Catalogue(dataSource),
   }
 }
