@@ -88,7 +88,7 @@ export async function call<E extends Endpoint>(
   endpoint: E,
   ...args: [...InputArgument<E>, signal?: AbortSignal]
 ): Promise<ResponseOf<E>> {
-  const [parts = {}, signal] = args as [Parts?, AbortSignal?]
+  const [parts = {}, signal] = args as unknown as [Parts?, AbortSignal?]
   const url = buildUrl(endpoint.path, parts)
   const attempt = () => send(endpoint.method, url, parts.body, signal) as Promise<ResponseOf<E>>
   try {

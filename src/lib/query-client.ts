@@ -6,7 +6,8 @@ const passing = (error: unknown) => isApiError(error, 'unreachable', 'unreadable
 
 /**
  * A write may change what the server computed for anything on screen (a sore joint changes today, the squad and every
- * ranking), so each successful one makes everything stale; only what is on screen is fetched again.
+ * ranking), so each successful one makes everything stale; only what is on screen is fetched again. A mutation that
+ * changes nothing the queries show says so with `meta: { keepsData: true }`.
  */
 export function createQueryClient({ onSignedOut }: { onSignedOut: () => void }): QueryClient {
   const signedOut = (error: unknown) => {
@@ -16,8 +17,8 @@ export function createQueryClient({ onSignedOut }: { onSignedOut: () => void }):
     queryCache: new QueryCache({ onError: signedOut }),
     mutationCache: new MutationCache({
       onError: signedOut,
-      onSuccess: () => {
-        void client.invalidateQueries()
+      onSuccess: (_data, _variables, _result, mutation) => {
+        if (mutation.meta?.keepsData !== true) void client.invalidateQueries()
       },
     }),
     defaultOptions: {

@@ -68,7 +68,7 @@ export function FailureState({
 }
 
 interface LoadedProps<T> {
-  query: UseQueryResult<T>
+  query: Pick<UseQueryResult<T>, 'data' | 'isError' | 'error' | 'isFetching'> & { refetch: () => unknown }
   /** What is loading, in words that follow “Loading”. */
   what: string
   skeleton?: ReactNode
