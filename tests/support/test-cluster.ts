@@ -4,7 +4,7 @@ import { execFileSync } from 'node:child_process'
 export function testClusterUrl(): string {
   const given = process.env.TEST_DATABASE_URL
   if (given !== undefined && given !== '') return given
-  return execFileSync('sh', ['server/scripts/postgres.sh', 'test'], {
+  return execFileSync('sh', ['server/scripts/postgres.sh', 'test', String(process.pid)], {
     encoding: 'utf8',
     stdio: ['ignore', 'pipe', 'inherit'],
   }).trim()
