@@ -93,21 +93,25 @@ function trunkStations(view: View, pose: Pose): Station[] {
   })
 }
 
-function headStations(view: View, pose: Pose): Station[] {
+/** Skull, jaw and a small nose, which tells which way the athlete faces. */
+function headPieces(view: View, pose: Pose): { head: Station[]; nose: Station[] } {
   const up = unit(subtract(pose.headTop, pose.headCentre), unit(subtract(pose.headCentre, pose.neckBase)))
   const forward: Vector = [up[2], 0, -up[0]]
-  const axes = [scale(up, HEAD.tall), scale(LEFTWARD, HEAD.wide), scale(forward, HEAD.deep)]
-  // Three overlapping rounds along the skull read as a head with a chin; the top keeps to headTop.
-  const top = subtract(pose.headTop, scale(up, HEAD.deep))
-  const chin = add(top, add(scale(up, -0.034), scale(forward, 0.008)))
-  const r = (halfWidth(view, { x: 1, y: 0 }, axes.slice(1)) + halfWidth(view, { x: 0, y: 1 }, axes)) / 2
-  const skull = Math.min(r, HEAD.deep * UNIT)
-  const nose = add(top, add(scale(up, -0.016), scale(forward, 0.053)))
-  return [
-    { ...project(view, top), r: skull },
-    { ...project(view, chin), r: skull * 0.74 },
-    { ...project(view, nose), r: 0.9 },
-  ]
+  const place = (along: number, ahead: number): Vector =>
+    add(pose.headTop, add(scale(up, -along), scale(forward, ahead)))
+  const wide =
+    UNIT * Math.hypot(HEAD.deep * dot(forward, view.right), HEAD.wide * view.right[1], HEAD.tall * dot(up, view.right))
+  const skull = Math.min(HEAD.deep * UNIT, Math.max(HEAD.wide * UNIT, wide))
+  return {
+    head: [
+      { ...project(view, place(HEAD.deep, -0.004)), r: skull },
+      { ...project(view, place(HEAD.deep + 0.036, 0.012)), r: skull * 0.68 },
+    ],
+    nose: [
+      { ...project(view, place(HEAD.deep + 0.006, 0.04)), r: 1.3 },
+      { ...project(view, place(HEAD.deep + 0.018, 0.056)), r: 0.8 },
+    ],
+  }
 }
 
 /** Hands close round whatever they grip, and lie open on a floor. */
@@ -132,7 +136,7 @@ function footStations(view: View, pose: Pose, side: Side): Station[] {
 }
 
 /** Sagittal views keep whole limbs before or behind the trunk; turned views sort each piece by its own depth. */
-const limbBias = (view: View, side: Side): number => (view.turn < 25 ? (side === 'right' ? 1 : -1) : 0)
+export const limbBias = (view: View, side: Side): number => (view.turn < 25 ? (side === 'right' ? 1 : -1) : 0)
 
 export function bodyShapes(view: View, pose: Pose, openHands: boolean): Shape[] {
   const shapes: Shape[] = []
@@ -142,7 +146,7 @@ export function bodyShapes(view: View, pose: Pose, openHands: boolean): Shape[] 
   const middle = depthOf(view, between(pose.pelvis, pose.neckBase, 0.5))
   const trunk = trunkStations(view, pose)
   put('body', tube(trunk), trunk, middle)
-  const head = headStations(view, pose)
+  const { head, nose } = headPieces(view, pose)
   const neck = limb(view, pose.neckBase, pose.headCentre, [
     [-0.1, 0.032],
     [0.4, 0.026],
@@ -150,6 +154,7 @@ export function bodyShapes(view: View, pose: Pose, openHands: boolean): Shape[] 
   ])
   const headDepth = depthOf(view, pose.headCentre)
   put('body', tube(neck), neck, Math.min(middle, headDepth) - 0.001)
+  put('body', wrap(nose), nose, headDepth + (view.turn < 45 ? -0.0005 : 0.0005))
   put('body', wrap(head), head, headDepth)
   for (const side of ['left', 'right'] as const) {
     const ink: Ink = side === 'left' ? 'bodyFar' : 'body'

@@ -1,0 +1,160 @@
+import type { ExerciseMechanics } from '#shared/mechanics/definition'
+import type { Pose, SolvedFrame, Vector } from '#shared/mechanics/solution'
+import type { Support } from '#shared/mechanics/vocabulary'
+import { bodyShapes } from './body'
+import { bearingHandShapes } from './equipment/hands'
+import { loadShapes } from './equipment/loads'
+import { bearingHands, bearsOn, handsLieFlat } from './equipment/places'
+import { bearings, padShapes, standOn, upperBackContact } from './equipment/supports'
+import { boxOf, round, subtract, union, type Box } from './geometry'
+import type { Shape } from './scene'
+import { block } from './solids'
+import { chooseView, project, type View } from './view'
+
+export interface DrawnFrame {
+  name: string
+  pose: Pose
+  shapes: Shape[]
+}
+export interface Drawing {
+  view: View
+  /** x, y, width, height; the same for every frame, so that frames can be laid side by side. */
+  viewBox: readonly [number, number, number, number]
+  frames: DrawnFrame[]
+}
+
+/** Room around everything for strokes, discs and rings. */
+const MARGIN = 4
+
+const lowest = (pose: Pose): number => Math.min(...Object.values(pose).map((place) => place[2]))
+
+const STANDING: readonly Support[] = ['feet', 'offFoot', 'knees', 'forearms']
+
+/** Where the body touches what it stands on, over all frames; soles on a machine's plate are not on the floor. */
+function standingPlaces(mechanics: ExerciseMechanics, frames: readonly SolvedFrame[]): Vector[] {
+  const onPlate = mechanics.loads.some(({ at, direction }) => at === 'feet' && typeof direction === 'object')
+  return frames.flatMap(({ pose, reactions }) => {
+    const solved = reactions.filter(({ support }) => STANDING.includes(support))
+    // Reactions are given at the bone; the skin of a knee or forearm reaches a little lower.
+    const feet = solved.map(({ support, at }): Vector => [
+      at[0],
+      at[1],
+      at[2] - (support in SKIN_BELOW ? SKIN_BELOW[support]! : 0),
+    ])
+    const standing = onPlate ? [] : feet.length > 0 ? feet : bearings(mechanics, pose)
+    const idleHand = bearsOn(mechanics, 'offHand') ? [subtract(pose['left.grip'], [0, 0, 0.02])] : []
+    return [
+      ...standing,
+      ...idleHand,
+      ...(handsLieFlat(mechanics) ? bearingHands(mechanics).map((side) => pose[`${side}.grip`]) : []),
+    ]
+  })
+}
+const SKIN_BELOW: Partial<Record<Support, number>> = { knees: 0.02, forearms: 0.016 }
+
+/** Height of the floor, or null when nothing stands on one (a free hang). */
+function floorOf(
+  mechanics: ExerciseMechanics,
+  frames: readonly SolvedFrame[],
+  places: readonly Vector[],
+): number | null {
+  const bottom = Math.min(...frames.map(({ pose }) => lowest(pose)))
+  if (places.length > 0) {
+    const least = Math.min(...places.map((place) => place[2]))
+    // A heel that drops below the ball of the foot needs a step under the ball, not a hole in the floor.
+    return bearsOn(mechanics, 'knees', 'forearms') ? least : Math.min(least, bottom)
+  }
+  if (bearsOn(mechanics, 'handsHanging') && !bearsOn(mechanics, 'seat')) return null
+  return bottom - 0.05
+}
+
+/** Places on the floor over all frames, and boxes under what bears higher. */
+function groundShapes(
+  view: View,
+  mechanics: ExerciseMechanics,
+  frames: readonly SolvedFrame[],
+  places: readonly Vector[],
+  floor: number,
+): Shape[] {
+  const shapes: Shape[] = []
+  const high = places.filter((place) => place[2] > floor + 0.06)
+  const groups = new Map<string, Vector[]>()
+  for (const place of high) {
+    const key = `${Math.round(place[2] * 8)} ${Math.round(place[0] * 3)}`
+    groups.set(key, [...(groups.get(key) ?? []), place])
+  }
+  for (const group of groups.values()) {
+    const mid = (axis: 0 | 1 | 2): number =>
+      (Math.max(...group.map((p) => p[axis])) + Math.min(...group.map((p) => p[axis]))) / 2
+    const half = (axis: 0 | 1): number =>
+      (Math.max(...group.map((p) => p[axis])) - Math.min(...group.map((p) => p[axis]))) / 2
+    shapes.push(
+      standOn(
+        view,
+        [mid(0), mid(1), 0],
+        Math.min(...group.map((p) => p[2])) - 0.008,
+        floor,
+        half(0) + 0.1,
+        half(1) + 0.07,
+      ),
+    )
+  }
+  if (bearsOn(mechanics, 'upperBack')) {
+    const contacts = frames.map(({ pose }) => upperBackContact(pose))
+    const top = Math.min(...contacts.map((place) => place[2]))
+    const x = contacts.reduce((sum, place) => sum + place[0], 0) / contacts.length
+    const away = frames[0]!.pose['right.ankle'][0] > x ? -1 : 1
+    shapes.push(standOn(view, [x + away * 0.07, 0, 0], top, floor, 0.1, 0.22))
+  }
+  const padded = bearsOn(mechanics, 'seat', 'backPad', 'chestPad')
+  const resting = padded || places.length === 0 ? frames.flatMap(({ pose }) => [pose.pelvis, pose.lumbar]) : []
+  const xs = [...places, ...resting].map((place) => place[0])
+  const [from, to] = [Math.min(...xs) - 0.16, Math.max(...xs) + 0.16]
+  shapes.push(
+    block(
+      view,
+      'ground',
+      [(from + to) / 2, 0, floor - 0.004],
+      [
+        [(to - from) / 2, 0, 0],
+        [0, 0.17, 0],
+        [0, 0, 0.004],
+      ],
+      -20,
+    ),
+  )
+  return shapes
+}
+
+/** Draws every posture of an exercise in one view, to one scale, with what stays still at one place. */
+export function drawExercise(mechanics: ExerciseMechanics, frames: readonly SolvedFrame[]): Drawing {
+  const view = chooseView(mechanics, frames)
+  const places = standingPlaces(mechanics, frames)
+  const floor = floorOf(mechanics, frames, places)
+  const ground = floor === null ? [] : groundShapes(view, mechanics, frames, places, floor)
+  const drawn = frames.map((frame): DrawnFrame => {
+    const shapes = [
+      ...ground,
+      ...padShapes(view, mechanics, frame.pose, floor ?? lowest(frame.pose) - 0.04),
+      ...bearingHandShapes(view, mechanics, frame.pose, floor),
+      ...bodyShapes(view, frame.pose, handsLieFlat(mechanics)),
+      ...loadShapes(view, mechanics, frame),
+    ].sort((a, b) => a.layer - b.layer)
+    return { name: frame.name, pose: frame.pose, shapes }
+  })
+  const all = union(drawn.flatMap(({ shapes, pose }) => [...shapes.map(({ box }) => box), jointsBox(view, pose)]))
+  const box: Box = {
+    left: all.left - MARGIN,
+    top: all.top - MARGIN,
+    right: all.right + MARGIN,
+    bottom: all.bottom + MARGIN,
+  }
+  return {
+    view,
+    frames: drawn,
+    viewBox: [round(box.left), round(box.top), round(box.right - box.left), round(box.bottom - box.top)],
+  }
+}
+
+const jointsBox = (view: View, pose: Pose): Box =>
+  boxOf(Object.values(pose).map((place) => ({ ...project(view, place), r: 1 })))
