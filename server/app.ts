@@ -4,9 +4,16 @@ import express, { type Express, type Router } from 'express'
 import helmet from 'helmet'
 import type { Dependencies } from './dependencies'
 import { AppError } from './errors'
+import { athletesRoutes } from './features/athletes/routes'
 import { auditRoutes } from './features/audit/routes'
 import { authRoutes } from './features/auth/routes'
+import { exercisesRoutes } from './features/exercises/routes'
+import { flagsRoutes } from './features/flags/routes'
 import { meRoutes } from './features/me/routes'
+import { placesRoutes } from './features/places/routes'
+import { sessionsRoutes } from './features/sessions/routes'
+import { soreJointsRoutes } from './features/sore-joints/routes'
+import { swapsRoutes } from './features/swaps/routes'
 import { authenticate } from './middleware/authenticate'
 import { readBody } from './middleware/body'
 import { serveClient } from './middleware/client'
@@ -18,7 +25,18 @@ import { setScope } from './middleware/scope'
 import { openApiRoutes } from './openapi'
 
 /** Every feature's routes; a feature is not served until it is named here. */
-const FEATURES: Array<(dependencies: Dependencies) => Router> = [authRoutes, meRoutes, auditRoutes]
+const FEATURES: Array<(dependencies: Dependencies) => Router> = [
+  authRoutes,
+  meRoutes,
+  athletesRoutes,
+  placesRoutes,
+  exercisesRoutes,
+  sessionsRoutes,
+  soreJointsRoutes,
+  swapsRoutes,
+  flagsRoutes,
+  auditRoutes,
+]
 
 const CONTENT_SECURITY_POLICY = {
   useDefaults: false,

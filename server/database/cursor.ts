@@ -2,7 +2,7 @@ import type { z } from 'zod'
 import { AppError } from '../errors'
 
 /** The sort values of the cursor, or null without one. Throws `invalid_request` for one that this list did not hand out. */
-export function decodeCursor<Key extends string[]>(cursor: string | undefined, key: z.ZodType<Key>): Key | null {
+export function decodeCursor<Key extends Array<string | number>>(cursor: string | undefined, key: z.ZodType<Key>): Key | null {
   if (cursor === undefined) return null
   try {
     const parsed = key.safeParse(JSON.parse(Buffer.from(cursor, 'base64url').toString('utf8')))
@@ -22,7 +22,7 @@ export function decodeCursor<Key extends string[]>(cursor: string | undefined, k
 export function toPage<Row>(
   found: readonly Row[],
   limit: number,
-  key: (row: Row) => string[],
+  key: (row: Row) => Array<string | number>,
 ): { rows: Row[]; nextCursor: string | null } {
   const rows = found.slice(0, limit)
   const last = rows.at(-1)

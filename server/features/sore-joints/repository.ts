@@ -85,6 +85,15 @@ export async function findStanding(
   return rows[0] ?? null
 }
 
+/** Standing reports of several athletes, red flags first, then the sorest. */
+export const findStandingOf = (manager: EntityManager, athleteIds: readonly string[]): Promise<SoreJointRow[]> =>
+  manager.query(
+    `${SELECT}
+      where s.athlete_id = any($1::uuid[]) and s.state <> 'closed'
+      order by s.state = 'redFlag' desc, s.rating desc, s.joint, s.side, s.id`,
+    [athleteIds],
+  )
+
 /** The coaches and physios an athlete lets in, for a notice; never for display. */
 export const findCareTeamAddresses = (manager: EntityManager, athleteId: string): Promise<Array<{ email: string }>> =>
   manager.query(
