@@ -2,7 +2,10 @@ import type { z } from 'zod'
 import { AppError } from '../errors'
 
 /** The sort values of the cursor, or null without one. Throws `invalid_request` for one that this list did not hand out. */
-export function decodeCursor<Key extends Array<string | number>>(cursor: string | undefined, key: z.ZodType<Key>): Key | null {
+export function decodeCursor<Key extends Array<string | number>>(
+  cursor: string | undefined,
+  key: z.ZodType<Key>,
+): Key | null {
   if (cursor === undefined) return null
   try {
     const parsed = key.safeParse(JSON.parse(Buffer.from(cursor, 'base64url').toString('utf8')))
