@@ -14,12 +14,14 @@ const schema = z
   .object({
     NODE_ENV: z.enum(['development', 'test', 'production']).default('development'),
     HOST: z.string().min(1).default('127.0.0.1'),
-    PORT: z.coerce.number().int().min(0).max(65535).default(4380),
+    PORT: z.coerce.number().int().min(1).max(65535).default(4380),
     PUBLIC_URL: optional(z.url({ protocol: /^https?$/ })),
     DATABASE_URL: z.url({ protocol: /^postgres(ql)?$/ }),
     DATABASE_POOL: z.coerce.number().int().min(2).max(100).default(10),
     ACCESS_TOKEN_SECRET: z.string().min(16),
-    SMTP_URL: z.url({ protocol: /^smtps?$/ }),
+    /** `local` keeps mails in memory and shows them on a loopback page. */
+    SMTP_URL: z.union([z.literal('local'), z.url({ protocol: /^smtps?$/ })]),
+    MAIL_PAGE_PORT: z.coerce.number().int().min(0).max(65535).default(0),
     MAIL_FROM: z.string().min(3).default('Pintle <no-reply@pintle.invalid>'),
     PINTLE_DEMO: flag.default(false),
     TRUST_PROXY: z.coerce.number().int().min(0).max(10).default(0),

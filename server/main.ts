@@ -1,0 +1,69 @@
+import type { AddressInfo } from 'node:net'
+import type { Server } from 'node:http'
+import type { Express } from 'express'
+import { createApp } from './app'
+import { createDependencies, type Dependencies } from './dependencies'
+import { parseEnv, publicUrl, type Env } from './env'
+import type { MailFake } from './mail/fake/start'
+
+/** How long requests that are under way may take once the server was told to stop. */
+const STOP_SECONDS = 10
+
+const tell = (line: string) => process.stdout.write(`${line}\n`)
+
+const listen = (app: Express, env: Env): Promise<Server> =>
+  new Promise((resolve, reject) => {
+    const server = app.listen(env.PORT, env.HOST, (error) => (error === undefined ? resolve(server) : reject(error)))
+  })
+
+/** The fake needs packages that a deployment with real mail does not install. */
+async function startLocalMail(env: Env): Promise<MailFake | null> {
+  if (env.SMTP_URL !== 'local') return null
+  const { startMailFake } = await import('./mail/fake/start')
+  return startMailFake({ pagePort: env.MAIL_PAGE_PORT })
+}
+
+async function stop(server: Server, { background, dataSource, logger, mailer }: Dependencies, mail: MailFake | null) {
+  logger.info('stopping')
+  const closed = new Promise<void>((resolve) => server.close(() => resolve()))
+  const timer = setTimeout(() => server.closeAllConnections(), STOP_SECONDS * 1000)
+  server.closeIdleConnections()
+  await closed
+  clearTimeout(timer)
+  await background.settled()
+  mailer.close()
+  await mail?.stop()
+  await dataSource.destroy()
+}
+
+async function main(): Promise<void> {
+  const given = parseEnv(process.env)
+  const mail = await startLocalMail(given)
+  const env: Env = mail === null ? given : { ...given, SMTP_URL: mail.smtpUrl }
+  const dependencies = await createDependencies(env)
+  const server = await listen(createApp(dependencies), env)
+  let stopping = false
+  for (const signal of ['SIGTERM', 'SIGINT'] as const) {
+    process.on(signal, () => {
+      // The second signal, from somebody who does not want to wait, ends it at once.
+      if (stopping) process.exit(1)
+      stopping = true
+      stop(server, dependencies, mail).then(
+        () => process.exit(0),
+        (error: unknown) => {
+          dependencies.logger.error({ err: error }, 'did not stop cleanly')
+          process.exit(1)
+        },
+      )
+    })
+  }
+  const { port } = server.address() as AddressInfo
+  dependencies.logger.info({ port }, 'listening')
+  if (mail !== null) tell(`Mails are not delivered but kept; read them at ${mail.pageUrl}`)
+  tell(`Pintle is ready at ${publicUrl(env)}`)
+}
+
+main().catch((error: unknown) => {
+  process.stderr.write(`${error instanceof Error ? error.message : String(error)}\n`)
+  process.exit(1)
+})
