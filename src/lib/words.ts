@@ -1,3 +1,4 @@
+import type { Flag } from '#shared/contract/flag'
 import type { Intent } from '#shared/contract/session'
 import type { Provocation, RedFlag, SoreJoint } from '#shared/contract/sore-joint'
 import type { Role } from '#shared/contract/me'
@@ -70,6 +71,14 @@ export const GUIDANCE_WORDS: Record<Guidance, string> = {
   ownBodyOnStraps: 'rings or straps',
 }
 
+export const FLAG_REASON_WORDS: Record<Flag['reason'], string> = {
+  hurts: 'it hurts',
+  wrongMuscle: 'it trains the wrong muscle',
+  loadOff: 'the load is off',
+  notPossibleHere: 'it is not possible here',
+  other: 'something else',
+}
+
 export const ROLE_WORDS: Record<Role, string> = { athlete: 'athlete', coach: 'coach', physio: 'physio', admin: 'admin' }
 
 /** “right elbow”, “lower back”. */
@@ -83,3 +92,7 @@ export function listWords(words: readonly string[]): string {
   if (words.length < 2) return words[0] ?? ''
   return `${words.slice(0, -1).join(', ')} and ${words.at(-1)}`
 }
+
+/** “bodyProfile” → “body profile”, for names that have no words of their own. */
+export const unhump = (name: string): string =>
+  name.replace(/([a-z])([A-Z])/g, (_, end: string, start: string) => `${end} ${start.toLowerCase()}`)

@@ -1,0 +1,182 @@
+import type { ExerciseDocument } from '#shared/contract/exercise'
+import type { Equipment } from '#shared/contract/place'
+import type { LeftOutRow } from '#shared/contract/swap'
+import type { Action, Support } from '#shared/mechanics/vocabulary'
+import type { Muscle } from '#shared/rules/muscle-names'
+
+/** What the catalogue's vocabularies are called on screen. Lower case, for the middle of a sentence. */
+export const FAMILY_WORDS: Record<ExerciseDocument['family'], string> = {
+  verticalPull: 'vertical pull',
+  horizontalPull: 'row',
+  straightArmPull: 'straight-arm pull',
+  verticalPush: 'overhead press',
+  horizontalPush: 'press',
+  dip: 'dip',
+  handstand: 'handstand',
+  lever: 'lever',
+  elbowFlexion: 'elbow flexion',
+  elbowExtension: 'elbow extension',
+  wristAndForearm: 'wrist and forearm',
+  shoulderIsolation: 'shoulder isolation',
+  squat: 'squat',
+  lunge: 'lunge',
+  legPress: 'leg press',
+  hinge: 'hinge',
+  kneeIsolation: 'knee isolation',
+  hipIsolation: 'hip isolation',
+  ankleIsolation: 'ankle isolation',
+  trunk: 'trunk',
+}
+export const familyWords = (family: string): string => FAMILY_WORDS[family as ExerciseDocument['family']] ?? family
+
+export const EQUIPMENT_WORDS: Record<Equipment, string> = {
+  pullUpBar: 'pull-up bar',
+  lowBar: 'low bar',
+  dipBars: 'dip bars',
+  parallettes: 'parallettes',
+  rings: 'rings',
+  wall: 'wall',
+  box: 'box',
+  flatBench: 'flat bench',
+  inclineBench: 'incline bench',
+  preacherBench: 'preacher bench',
+  backExtensionBench: 'back extension bench',
+  barbell: 'barbell',
+  squatRack: 'squat rack',
+  dumbbells: 'dumbbells',
+  dipBelt: 'dip belt',
+  bands: 'bands',
+  cableHigh: 'high cable',
+  cableLow: 'low cable',
+  latPulldown: 'lat pulldown',
+  cableRow: 'cable row',
+  assistedPullUpMachine: 'assisted pull-up machine',
+  pulloverMachine: 'pullover machine',
+  chestPressMachine: 'chest press machine',
+  shoulderPressMachine: 'shoulder press machine',
+  rowMachine: 'row machine',
+  flyMachine: 'fly machine',
+  lateralRaiseMachine: 'lateral raise machine',
+  legPress: 'leg press',
+  hackSquatMachine: 'hack squat machine',
+  kneeExtensionMachine: 'knee extension machine',
+  legCurlMachine: 'leg curl machine',
+  hipAbductionMachine: 'hip abduction machine',
+  hipAdductionMachine: 'hip adduction machine',
+  calfRaiseMachine: 'calf raise machine',
+  abdominalMachine: 'abdominal machine',
+}
+
+export const SUPPORT_WORDS: Record<Support, string> = {
+  handsHanging: 'hanging',
+  handsPushing: 'on the hands',
+  forearms: 'on the forearms',
+  feet: 'standing',
+  knees: 'kneeling',
+  upperBack: 'upper back on a bench',
+  offHand: 'one hand propped',
+  offFoot: 'other foot propped',
+  seat: 'seat',
+  backPad: 'back pad',
+  chestPad: 'chest pad',
+  thighPad: 'thigh pad',
+  armPad: 'arm pad',
+  forearmPad: 'forearm pad',
+  shankPad: 'shin pad',
+}
+/** A seated or lying athlete's feet are on the floor too, but that is not what holds them. */
+export function supportWords(supports: readonly string[]): string {
+  const padded = supports.some((support) =>
+    ['seat', 'backPad', 'chestPad', 'handsHanging', 'handsPushing', 'upperBack'].includes(support),
+  )
+  return supports
+    .filter((support) => !(padded && support === 'feet'))
+    .map((support) => SUPPORT_WORDS[support as Support] ?? support)
+    .join(', ')
+}
+
+export const MUSCLE_WORDS: Record<Muscle, string> = {
+  latissimus: 'latissimus',
+  teresMajor: 'teres major',
+  pectoralisMajorClavicular: 'upper chest',
+  pectoralisMajorSternal: 'chest',
+  anteriorDeltoid: 'front deltoid',
+  middleDeltoid: 'side deltoid',
+  posteriorDeltoid: 'rear deltoid',
+  rotatorCuffExternal: 'outer rotator cuff',
+  subscapularis: 'subscapularis',
+  upperTrapezius: 'upper trapezius',
+  middleTrapezius: 'middle trapezius',
+  lowerTrapezius: 'lower trapezius',
+  serratusAnterior: 'serratus anterior',
+  biceps: 'biceps',
+  brachialis: 'brachialis',
+  brachioradialis: 'brachioradialis',
+  triceps: 'triceps',
+  tricepsLongHead: 'triceps, long head',
+  wristFlexors: 'wrist flexors',
+  wristExtensors: 'wrist extensors',
+  fingerFlexors: 'finger flexors',
+  neckFlexors: 'neck flexors',
+  neckExtensors: 'neck extensors',
+  rectusAbdominis: 'abdominals',
+  obliques: 'obliques',
+  erectorSpinae: 'spinal erectors',
+  hipFlexors: 'hip flexors',
+  gluteusMaximus: 'gluteus maximus',
+  gluteusMedius: 'gluteus medius',
+  hipAdductors: 'hip adductors',
+  hamstrings: 'hamstrings',
+  vasti: 'vasti',
+  rectusFemoris: 'rectus femoris',
+  gastrocnemius: 'gastrocnemius',
+  soleus: 'soleus',
+  tibialisAnterior: 'tibialis anterior',
+}
+
+export const ACTION_WORDS: Record<Action, string> = {
+  grip: 'grip',
+  wristFlexion: 'wrist flexion',
+  wristExtension: 'wrist extension',
+  wristRadialDeviation: 'wrist toward the thumb',
+  wristUlnarDeviation: 'wrist toward the little finger',
+  elbowFlexion: 'elbow flexion',
+  elbowExtension: 'elbow extension',
+  shoulderFlexion: 'shoulder flexion',
+  shoulderExtension: 'shoulder extension',
+  shoulderAbduction: 'shoulder abduction',
+  shoulderAdduction: 'shoulder adduction',
+  shoulderHorizontalAdduction: 'shoulder horizontal adduction',
+  shoulderHorizontalAbduction: 'shoulder horizontal abduction',
+  shoulderInternalRotation: 'shoulder internal rotation',
+  shoulderExternalRotation: 'shoulder external rotation',
+  scapularRetraction: 'shoulder blades back',
+  scapularProtraction: 'shoulder blades forward',
+  scapularElevation: 'shoulder blades up',
+  scapularDepression: 'shoulder blades down',
+  neckFlexion: 'neck flexion',
+  neckExtension: 'neck extension',
+  trunkFlexion: 'trunk flexion',
+  trunkExtension: 'trunk extension',
+  trunkLateralFlexion: 'trunk side bend',
+  trunkRotation: 'trunk rotation',
+  hipFlexion: 'hip flexion',
+  hipExtension: 'hip extension',
+  hipAbduction: 'hip abduction',
+  hipAdduction: 'hip adduction',
+  kneeFlexion: 'knee flexion',
+  kneeExtension: 'knee extension',
+  anklePlantarflexion: 'ankle plantarflexion',
+  ankleDorsiflexion: 'ankle dorsiflexion',
+}
+
+/** Headings of the list of what was left out. */
+export const LEFT_OUT_WORDS: Record<LeftOutRow['why'], string> = {
+  redFlag: 'Red flag',
+  overCap: 'Over a cap',
+  banned: 'Restricted',
+  noEquipment: 'Not at this place',
+  beyondStrength: 'Beyond current strength',
+  beyondSkill: 'Beyond current skill',
+  targetNotTrained: 'Does not train the target',
+}

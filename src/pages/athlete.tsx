@@ -1,0 +1,69 @@
+import { useQuery } from '@tanstack/react-query'
+import { useParams } from 'react-router-dom'
+import type { Today } from '#shared/contract/session'
+import { homeFor } from '@/app/navigation'
+import { LinkButton } from '@/components/ui/button'
+import { PageHeader } from '@/components/ui/page-header'
+import { EmptyState, Loaded } from '@/components/ui/states'
+import { todayQuery } from '@/features/sessions/api'
+import { RestDay } from '@/features/sessions/components/rest-day'
+import { SessionSlots } from '@/features/sessions/components/session-slots'
+import { SlotsSkeleton } from '@/features/sessions/components/slots-skeleton'
+import { ClosedJoints } from '@/features/sore-joints/components/closed-joints'
+import { StandingJoints } from '@/features/sore-joints/components/standing-joints'
+import { isApiError } from '@/lib/api-error'
+import { formatDay } from '@/lib/format'
+import { usePerson } from '@/lib/person'
+import { useToday } from '@/lib/use-today'
+
+/** One athlete as their care team sees them: today and the joints, to read. */
+export function Component() {
+  const { athleteId = '' } = useParams()
+  const person = usePerson()
+  const query = useQuery(todayQuery(athleteId, useToday()))
+  if (isApiError(query.error, 'not_found', 'forbidden'))
+    return (
+      <>
+        <PageHeader title="No such athlete" />
+        <EmptyState
+          title="This athlete has not let you in."
+          action={<LinkButton to={homeFor(person)}>Back</LinkButton>}
+        >
+          Or the address is wrong. Only the athlete can let you in.
+        </EmptyState>
+      </>
+    )
+  return (
+    <>
+      {query.data === undefined && <PageHeader title="Athlete" />}
+      <Loaded query={query} what="the athlete’s day" skeleton={<SlotsSkeleton />}>
+        {(today) => (
+          <>
+            <PageHeader title={today.athlete.name} crumb={crumb(today)} />
+            <div className="grid items-start gap-8 lg:grid-cols-[3fr_2fr]">
+              <section aria-label="Today">
+                <h2 className="mb-3 text-xl">Today</h2>
+                {today.session === null ? (
+                  <RestDay today={today} whose={today.athlete.name} />
+                ) : (
+                  <SessionSlots session={today.session} units={person.units} loadKind={() => undefined} />
+                )}
+              </section>
+              <section aria-label="Joints">
+                <h2 className="mb-3 text-xl">Joints</h2>
+                <StandingJoints athleteId={athleteId} own={false} empty="What the athlete reports stands here." />
+                <h3 className="mt-6 mb-2 text-lg">Earlier</h3>
+                <ClosedJoints athleteId={athleteId} />
+              </section>
+            </div>
+          </>
+        )}
+      </Loaded>
+    </>
+  )
+}
+
+const crumb = ({ day, session }: Today) =>
+  [formatDay(day), session && `${session.title}, ${session.minutes} min`, session?.placeName]
+    .filter(Boolean)
+    .join(' · ')

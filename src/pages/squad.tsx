@@ -1,0 +1,13 @@
+import { PageHeader } from '@/components/ui/page-header'
+import { AthletesList } from '@/features/athletes/components/athletes-list'
+import { formatDay } from '@/lib/format'
+import { useToday } from '@/lib/use-today'
+
+export function Component() {
+  return (
+    <>
+      <PageHeader title="Squad" crumb={formatDay(useToday())} />
+      <AthletesList caption="Squad" />
+    </>
+  )
+}
