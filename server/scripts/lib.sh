@@ -69,3 +69,19 @@ ensure_database() {
 
 # The first free loopback port from this one up.
 free_port() { node server/scripts/free-port.mjs "$1"; }
+
+# Builds client and server into dist/, unless that was done from the very same sources.
+ensure_build() {
+  hash=$(node server/scripts/sources-hash.mjs)
+  if [ -f dist/sources ] && [ "$(cat dist/sources)" = "$hash" ]; then return 0; fi
+  say "Building …"
+  rm -f dist/sources
+  mkdir -p .data
+  for config in vite.config.ts vite.server.config.ts; do
+    NODE_ENV=production npx --no-install vite build -c "$config" --logLevel warn >.data/build.log 2>&1 || {
+      cat .data/build.log >&2
+      fail "The build failed: see the lines above."
+    }
+  done
+  printf '%s' "$hash" >dist/sources
+}

@@ -1,0 +1,19 @@
+#!/bin/sh
+# npm start: everything from a fresh checkout to a served address, and nothing twice. Settings: .env.example.
+set -eu
+cd "$(dirname "$0")/../.."
+. server/scripts/lib.sh
+
+require_node
+load_env_file
+ensure_dependencies
+ensure_secrets
+: "${NODE_ENV:=production}" "${PINTLE_DEMO:=true}" "${SMTP_URL:=local}" "${LOG_LEVEL:=warn}"
+export NODE_ENV PINTLE_DEMO SMTP_URL LOG_LEVEL
+ensure_database
+ensure_build
+if [ -z "${PORT:-}" ]; then PORT=$(free_port 4380) || fail "There is no free port from 4380 up; choose one with PORT."; fi
+export PORT
+node --enable-source-maps dist/server/seed.js || fail "The database could not be prepared: see the lines above."
+# exec, so that a signal sent to this process reaches the server.
+exec node --enable-source-maps dist/server/main.js
