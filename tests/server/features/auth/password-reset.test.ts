@@ -1,0 +1,110 @@
+import { describe, expect, it } from 'vitest'
+import { AuditEntry } from '#server/features/audit/entity'
+import { PasswordReset } from '#server/features/auth/entity'
+import { hashToken } from '#server/features/auth/token'
+import { User } from '#server/features/people/entity'
+import { expectError } from '#tests/support/expect-error'
+import { TEST_PASSWORD } from '#tests/support/factories'
+import { testApp } from '#tests/support/test-app'
+
+const app = testApp({ PUBLIC_URL: 'https://pintle.example.test' })
+const NEW_PASSWORD = 'quite another password'
+
+const ask = (email: string) => app().anonymous().post('/api/auth/password-reset-requests').send({ email })
+const reset = (token: string, password = NEW_PASSWORD) =>
+  app().anonymous().post('/api/auth/password-resets').send({ token, password })
+const signIn = (email: string, password: string) =>
+  app().anonymous().post('/api/auth/sign-in').send({ email, password })
+
+/** The token in the mail that this address got. */
+async function tokenFor(email: string): Promise<string> {
+  await ask(email).expect(202)
+  await app().dependencies.background.settled()
+  const letter = app().mailBox.letters.findLast(({ to }) => to === email)
+  return /reset-password#token=([\w-]+)/.exec(letter?.text ?? '')?.[1] ?? ''
+}
+
+describe('asking for a reset link', () => {
+  it('answers the same whether the address exists or not, and mails only to one that does', async () => {
+    const person = await app().make.athlete()
+    const known = await ask(person.email)
+    const unknown = await ask('nobody.at.all@example.test')
+    await app().dependencies.background.settled()
+    const shape = ({ status, text, headers }: typeof known) => ({
+      status,
+      text,
+      names: Object.keys(headers).toSorted(),
+    })
+    expect(known.status).toBe(202)
+    expect(shape(unknown)).toEqual(shape(known))
+    expect(app().mailBox.letters.map(({ to }) => to)).toEqual([person.email])
+  })
+
+  it('sends a link whose token never reaches a server log, in both forms of the mail', async () => {
+    const person = await app().make.athlete({ name: 'Ann <b>' })
+    const token = await tokenFor(person.email)
+    const url = `https://pintle.example.test/reset-password#token=${token}`
+    const letter = app().mailBox.letters.findLast(({ to }) => to === person.email)
+    expect(letter?.text).toContain(url)
+    expect(letter?.html).toContain(`href="${url}"`)
+    expect(letter?.html).toContain('Ann &lt;b&gt;')
+    expect(JSON.stringify(app().logs)).not.toContain(token)
+  })
+
+  it('keeps the token hashed and makes an older link useless', async () => {
+    const person = await app().make.athlete()
+    const first = await tokenFor(person.email)
+    const second = await tokenFor(person.email)
+    const rows = await app().dataSource.manager.findBy(PasswordReset, { userId: person.id })
+    expect(rows.map(({ tokenHash }) => tokenHash)).toEqual([hashToken(second)])
+    expectError(await reset(first), 'reset_link_invalid')
+  })
+
+  it('refuses what is no address', async () => {
+    expectError(await ask('no address'), 'invalid_request', ['email'])
+  })
+})
+
+describe('setting a new password', () => {
+  it('lets the new password in, shuts the old one out and ends every session', async () => {
+    const person = await app().make.athlete()
+    const agent = await app().as(person)
+    await agent.get('/api/me').expect(200)
+    await reset(await tokenFor(person.email)).expect(204)
+    expectError(await agent.get('/api/me'), 'session_expired')
+    expectError(await signIn(person.email, TEST_PASSWORD), 'wrong_credentials')
+    await signIn(person.email, NEW_PASSWORD).expect(200)
+    const { passwordHash } = await app().dataSource.manager.findOneByOrFail(User, { id: person.id })
+    expect(passwordHash).toMatch(/^\$argon2id\$/)
+    expect(await app().dataSource.manager.countBy(AuditEntry, { subjectId: person.id, action: 'reset.password' })).toBe(
+      1,
+    )
+  })
+
+  it('works once, also when tried twice at the same moment', async () => {
+    const person = await app().make.athlete()
+    const token = await tokenFor(person.email)
+    const answers = await Promise.all([reset(token), reset(token)])
+    expect(answers.map(({ status }) => status).toSorted()).toEqual([204, 410])
+    expectError(await reset(token), 'reset_link_invalid')
+  })
+
+  it('works for thirty minutes', async () => {
+    const person = await app().make.athlete()
+    const token = await tokenFor(person.email)
+    app().clock.advance({ minutes: 30, seconds: 1 })
+    expectError(await reset(token), 'reset_link_invalid')
+    await signIn(person.email, TEST_PASSWORD).expect(200)
+  })
+
+  it('keeps the link when the new password is too short', async () => {
+    const person = await app().make.athlete()
+    const token = await tokenFor(person.email)
+    expectError(await reset(token, 'short'), 'invalid_request', ['password'])
+    await reset(token).expect(204)
+  })
+
+  it('refuses a made-up token', async () => {
+    expectError(await reset('x'.repeat(43)), 'reset_link_invalid')
+  })
+})
