@@ -58,6 +58,8 @@ export const ruleSet = z.strictObject({
   strength: z.strictObject({
     /** N·m per side (whole trunk and neck), N for grip and the scapular actions. */
     norms: every(ACTIONS, cited(bySex(positive))),
+    /** Arm (m) over the wrist of the finger muscles that grip, which stiffen a wrist that holds something. */
+    grippingWristArm: cited(share),
     /** How a moment and a force grow with body mass: strength × (mass ÷ norm mass)^exponent. */
     momentExponent: cited(positive),
     forceExponent: cited(positive),
@@ -133,9 +135,13 @@ export const ruleSet = z.strictObject({
     path: cited(every(GUIDANCES, share)),
     /** How demanding the steadiest of the supports is. */
     base: cited(every(SUPPORTS, share)),
-    /** Upside down: hands or forearms below the trunk with nothing else bearing. */
+    /** Added when one hand or foot alone bears, and when the trunk is upside down. */
+    oneContact: cited(share),
     inverted: cited(share),
+    /** Excursion (degrees) from which a joint counts as moving, and how many moving joints count as all. */
     joints: cited(z.strictObject({ movingFrom: positive, most: positive })),
+    /** Height of load or pelvis above the ground, × stature, that counts in full. */
+    massAboveFull: cited(positive),
     skill: cited(every(SKILL_GRADES, share)),
     /** Points at most of each ingredient; together 100. */
     points: cited(

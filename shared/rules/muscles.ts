@@ -1,11 +1,73 @@
 import type { RuleSet } from '../contract/rule-set'
-import type { Muscle } from './muscle-names'
+import { ACTIONS, type Action, type Grip } from '../mechanics/vocabulary'
+import { averageAdult } from './average-adult'
+import { demandsAt, effortsOf } from './efforts'
+import { loadRange, strengthBounds } from './load-range'
+import { MUSCLES, TARGET_GROUPS, type Muscle, type TargetGroup } from './muscle-names'
 import type { Movement } from './types'
 
-/** The muscles an average adult drives at the exercise's limit, hardest first: the contract's `exercise.muscles`. */
-export function musclesOf(
-  _movement: Pick<Movement, 'mechanics' | 'solution'>,
-  _ruleSet: RuleSet,
+/** A muscle's role (0–1) in an action; in elbow flexion the grip turns the roles. */
+export function roleIn(action: Action, muscle: Muscle, grip: Grip, ruleSet: RuleSet): number {
+  const role = ruleSet.muscles.roles[action].value[muscle] ?? 0
+  return action === 'elbowFlexion' ? role * (ruleSet.muscles.gripRoles.value[grip][muscle] ?? 1) : role
+}
+
+/** The largest role any muscle of a group has in an action. */
+export function groupRoleIn(action: Action, group: TargetGroup, grip: Grip, ruleSet: RuleSet): number {
+  let most = 0
+  for (const muscle of TARGET_GROUPS[group]) {
+    const role = roleIn(action, muscle, grip, ruleSet)
+    if (role > most) most = role
+  }
+  return most
+}
+
+/** How hard a group's hardest-driven muscle works: the largest role × demand. */
+export function groupDrive(
+  demands: ReadonlyMap<Action, number>,
+  group: TargetGroup,
+  grip: Grip,
+  ruleSet: RuleSet,
+): number {
+  let most = 0
+  for (const [action, demand] of demands) {
+    const drive = groupRoleIn(action, group, grip, ruleSet) * demand
+    if (drive > most) most = drive
+  }
+  return most
+}
+
+/** drive(muscle) = max over actions of role × demand, hardest first, equal ones in the order of their names' list. */
+export function muscleDrives(
+  demands: ReadonlyMap<Action, number>,
+  grip: Grip,
+  ruleSet: RuleSet,
 ): Array<{ muscle: Muscle; drive: number }> {
-  throw new Error('to be written')
+  return MUSCLES.map((muscle) => {
+    let drive = 0
+    for (const action of ACTIONS) {
+      const value = roleIn(action, muscle, grip, ruleSet) * (demands.get(action) ?? 0)
+      if (value > drive) drive = value
+    }
+    return { muscle, drive }
+  }).sort((one, other) => other.drive - one.drive)
+}
+
+/**
+ * The muscles an average adult drives hardest where the exercise's first action gives out, as a share of it (0–1), hardest
+ * first: the contract's `exercise.muscles`. Without an external load that can grow, at body weight.
+ */
+export function musclesOf(
+  movement: Pick<Movement, 'mechanics' | 'solution'>,
+  ruleSet: RuleSet,
+): Array<{ muscle: Muscle; drive: number }> {
+  const efforts = effortsOf(movement, averageAdult('unspecified', ruleSet), ruleSet)
+  const range = loadRange(strengthBounds(efforts, 1))
+  const demands = demandsAt(efforts, Number.isFinite(range.most) ? range.most : 0)
+  let limit = 0
+  for (const demand of demands.values()) if (demand > limit) limit = demand
+  if (limit === 0) return []
+  return muscleDrives(demands, movement.mechanics.grip, ruleSet)
+    .map(({ muscle, drive }) => ({ muscle, drive: drive / limit }))
+    .filter(({ drive }) => drive >= ruleSet.muscles.leastListed.value)
 }

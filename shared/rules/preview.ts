@@ -1,14 +1,57 @@
 import type { Preview } from '../contract/exercise'
 import type { RuleSet } from '../contract/rule-set'
+import { JOINTS, type Action } from '../mechanics/vocabulary'
+import { demandOf, demandsAt, effortsOf, limiterAt } from './efforts'
+import { asJointStress, tightestBySide } from './joint-stress'
+import { loadRange, strengthBounds } from './load-range'
+import { muscleDrives } from './muscles'
+import { compressionAt, strainsOf } from './stress'
 import type { Athlete, Cap, Movement } from './types'
 
-/** Moments, demands and stresses per frame at a load (kg), with the 1RM, the limiter and the muscles driven. */
+/**
+ * Moments, demands and stresses per frame at a load (kg), with the 1RM, the limiter and the muscles driven.
+ * Joint stresses of a frame are those of that frame alone; motion factors are the repetition's.
+ */
 export function previewOf(
-  _movement: Movement,
-  _athlete: Athlete,
-  _load: number,
-  _caps: readonly Cap[],
-  _ruleSet: RuleSet,
+  movement: Movement,
+  athlete: Athlete,
+  load: number,
+  caps: readonly Cap[],
+  ruleSet: RuleSet,
 ): Preview {
-  throw new Error('to be written')
+  const efforts = effortsOf(movement, athlete, ruleSet)
+  const strains = strainsOf(movement, efforts, athlete, ruleSet)
+  const range = loadRange(strengthBounds(efforts, 1))
+  const grows = Number.isFinite(range.most)
+  const possible = range.least <= range.most
+  const demands = demandsAt(efforts, load)
+  const limiter = grows && possible && range.mostBy ? range.mostBy.action : limiterAt(efforts, load)?.action
+  return {
+    frames: movement.solution.frames.map((frame, index) => {
+      const strongest = new Map<Action, Preview['frames'][number]['actions'][number]>()
+      for (const effort of efforts) {
+        if (effort.frame !== index) continue
+        const answer = demandOf(effort, load)
+        if (!answer || answer.demand <= (strongest.get(answer.action)?.demand ?? 0)) continue
+        const moment = Math.abs(effort.alpha + effort.beta * load)
+        const strength = answer.action === effort.positive ? effort.strengthPositive : effort.strengthNegative
+        strongest.set(answer.action, { action: answer.action, moment, strength, demand: answer.demand })
+      }
+      const own = strains.filter((strain) => strain.frame === index)
+      return {
+        name: frame.name,
+        actions: [...strongest.values()].sort((one, other) => other.demand - one.demand),
+        joints: JOINTS.flatMap((joint) => tightestBySide(joint, own, caps, load)).map(asJointStress),
+        compression: compressionAt(efforts, index, load, ruleSet),
+        reactions: frame.reactions.map(({ support, a, b }) => ({ support, share: a + (b * load) / athlete.bodyMass })),
+      }
+    }),
+    oneRepMax: grows && possible ? range.most : null,
+    limiter: limiter ?? null,
+    muscles: muscleDrives(demands, movement.mechanics.grip, ruleSet).filter(
+      ({ drive }) => drive >= ruleSet.muscles.leastListed.value,
+    ),
+    coordination: movement.coordination,
+    estimated: Object.keys(athlete.factors).length === 0,
+  }
 }

@@ -1,7 +1,115 @@
 import type { RuleSet } from '../contract/rule-set'
-import type { RankRequest, RankResult } from './types'
+import type { LeftOutRow, SwapRow } from '../contract/swap'
+import { capOfRating } from './caps'
+import { contextOf, type RankContext } from './context'
+import { asJointStress, isOver } from './joint-stress'
+import { groupDrive } from './muscles'
+import { rate, redFlagReason, shownJoints } from './rate'
+import type { Candidate, RankRequest, RankResult } from './types'
 
-/** Ranks swaps for the original: rows best first, and everything left out by name with its reason. */
-export function rank(_request: RankRequest, _ruleSet: RuleSet): RankResult {
-  throw new Error('to be written')
+type Unranked = Omit<SwapRow, 'rank'>
+const byText = (one: string, other: string): number => (one < other ? -1 : one > other ? 1 : 0)
+const byName = (one: { name: string; id: string }, other: { name: string; id: string }): number =>
+  byText(one.name, other.name) || byText(one.id, other.id)
+
+/** Best score first; equal scores by name, then id, by code unit, whatever the reader's language. */
+export const bestFirst = (one: Unranked, other: Unranked): number =>
+  other.score - one.score || byName(one.exercise, other.exercise)
+
+/** The original as planned, with the stresses and caps it meets; null when it is beyond current strength. */
+function originalRow(context: RankContext): RankResult['originalRow'] {
+  const { original, request, ruleSet } = context
+  const { candidate, limiter, demands, load } = original
+  const { document } = candidate
+  if (limiter === null || limiter.demand > 1) return null
+  return {
+    exercise: {
+      id: candidate.id,
+      slug: document.slug,
+      name: document.name,
+      versionId: candidate.versionId,
+      guidance: document.mechanics.guidance,
+      supports: [...document.mechanics.supports],
+    },
+    targetDrive: groupDrive(demands, request.target, document.mechanics.grip, ruleSet) / limiter.demand,
+    limiter: limiter.action,
+    joints: shownJoints(original, context, load).map(asJointStress),
+    coordination: candidate.coordination,
+    dose: { ...request.planned },
+  }
+}
+
+/**
+ * Whether the original may stand among its own swaps: only when a sore joint puts it over a cap as planned, so that a
+ * lighter dose of it is a change. Unaffected, it is what the athlete came from.
+ */
+const mayReturn = (context: RankContext): boolean =>
+  shownJoints(context.original, context, context.original.load).some(isOver)
+
+/** The candidates a ranking looks at: all but an original that needs no change. */
+export function consideredIn(context: RankContext): readonly Candidate[] {
+  const { candidates, original } = context.request
+  return mayReturn(context) ? candidates : candidates.filter(({ id }) => id !== original.id)
+}
+
+/** Puts rows and left-outs in their order and adds what the page needs to know about the athlete. */
+export function resultOf(context: RankContext, rows: Unranked[], leftOut: LeftOutRow[]): RankResult {
+  const { request, ruleSet, sore, flagged } = context
+  return {
+    originalRow: originalRow(context),
+    estimated: Object.keys(request.athlete.factors).length === 0,
+    minor: request.athlete.minor,
+    sore: sore.map((report) => ({
+      soreJointId: report.soreJointId,
+      joint: report.joint,
+      side: report.side,
+      rating: report.rating,
+      provocations: [...report.provocations],
+      cap: capOfRating(report, ruleSet),
+    })),
+    redFlags: flagged.map(({ soreJointId, joint, side, redFlags }) => ({
+      soreJointId,
+      joint,
+      side,
+      flags: redFlags.length > 0 ? [...redFlags] : ['severePain'],
+      urgent: redFlags.some((flag) => ruleSet.caps.urgentFlags.value.includes(flag)),
+    })),
+    items: [...rows].sort(bestFirst).map(({ exercise, ...row }, index) => ({ exercise, rank: index + 1, ...row })),
+    leftOut: [...leftOut].sort((one, other) => byName(one.exercise, other.exercise)),
+  }
+}
+
+/** Nothing is offered: the original or the target works across a red-flagged joint. */
+export function stopped(context: RankContext): RankResult | null {
+  const { stop } = context
+  if (stop === null) return null
+  const reason = redFlagReason(stop)
+  return resultOf(
+    context,
+    [],
+    consideredIn(context).map(({ id, document: { slug, name } }) => ({
+      exercise: { id, slug, name },
+      why: 'redFlag',
+      reason,
+    })),
+  )
+}
+
+/**
+ * Ranks swaps for the original: rows best first with dose, stresses, score, factors and reason, and everything left out by
+ * name with its reason. Pure: the same request and rule set give the same answer bit for bit, whatever the order of the
+ * candidates.
+ */
+export function rank(request: RankRequest, ruleSet: RuleSet): RankResult {
+  const context = contextOf(request, ruleSet)
+  const nothing = stopped(context)
+  if (nothing !== null) return nothing
+  const rows: Unranked[] = []
+  const leftOut: LeftOutRow[] = []
+  for (const candidate of consideredIn(context)) {
+    const rated = rate(candidate, context)
+    if ('row' in rated) rows.push(rated.row)
+    else leftOut.push(rated.leftOut)
+  }
+  return resultOf(context, rows, leftOut)
 }

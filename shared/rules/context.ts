@@ -1,0 +1,66 @@
+import type { RuleSet } from '../contract/rule-set'
+import { ACTIONS, ACTION_JOINT, type Action, type Joint } from '../mechanics/vocabulary'
+import { stopsAll } from './affected'
+import { capsFromSoreness, isRedFlagged } from './caps'
+import { tightestBySide } from './joint-stress'
+import { groupDrive, groupRoleIn } from './muscles'
+import { planned, prepare, type Planned } from './original'
+import { strengths } from './strength'
+import type { Cap, RankRequest, SoreJointInput } from './types'
+
+/** Everything a ranking works out once, before it looks at the candidates. */
+export interface RankContext {
+  request: RankRequest
+  ruleSet: RuleSet
+  strength: Record<Action, number>
+  original: Planned
+  /** Target drive of the original done healthy. */
+  originalDrive: number
+  caps: readonly Cap[]
+  /** Reports that bind by their cap, and those that stop training of their joint. */
+  sore: readonly SoreJointInput[]
+  flagged: readonly SoreJointInput[]
+  /** The report that forbids any swap at all: the original or the target works across its joint. */
+  stop: SoreJointInput | null
+  /** Names of exercises by slug, for pointing to an assisted form. */
+  names: ReadonlyMap<string, string>
+}
+
+/** Joints across which a target group works. */
+function targetJoints(request: RankRequest, ruleSet: RuleSet): ReadonlySet<Joint> {
+  const grip = request.original.document.mechanics.grip
+  return new Set(
+    ACTIONS.filter(
+      (action) => groupRoleIn(action, request.target, grip, ruleSet) >= ruleSet.score.servesFrom.value,
+    ).map((action) => ACTION_JOINT[action]),
+  )
+}
+
+/** Prepares a ranking: strength, the healthy original, caps and red flags. */
+export function contextOf(request: RankRequest, ruleSet: RuleSet): RankContext {
+  const { athlete, sore } = request
+  const strength = strengths(athlete, ruleSet)
+  const original = planned(prepare(request.original, athlete, ruleSet, strength), request.planned, ruleSet)
+  const limit = original.limiter?.demand ?? 0
+  const drive = groupDrive(original.demands, request.target, request.original.document.mechanics.grip, ruleSet)
+  const flagged = sore.filter((report) => isRedFlagged(report, ruleSet))
+  const standing = sore.filter((report) => !isRedFlagged(report, ruleSet))
+  const across = targetJoints(request, ruleSet)
+  const stressAt = (joint: Joint) => tightestBySide(joint, original.strains, [], original.load)[0]?.stress ?? 0
+  const stop = flagged.find(
+    (report) =>
+      stopsAll(report, ruleSet) || across.has(report.joint) || stressAt(report.joint) >= ruleSet.caps.loadedFrom.value,
+  )
+  return {
+    request,
+    ruleSet,
+    strength,
+    original,
+    originalDrive: limit === 0 ? 0 : drive / limit,
+    caps: capsFromSoreness(standing, ruleSet),
+    sore: standing,
+    flagged,
+    stop: stop ?? null,
+    names: new Map(request.candidates.map(({ document }) => [document.slug, document.name])),
+  }
+}

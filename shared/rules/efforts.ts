@@ -1,0 +1,115 @@
+import type { RuleSet } from '../contract/rule-set'
+import { AXES, type Axis, type Role } from '../mechanics/solution'
+import { FORCE_ACTIONS, type Action } from '../mechanics/vocabulary'
+import { interpolate } from './numbers'
+import { strengths } from './strength'
+import type { Athlete, Movement } from './types'
+
+/** Standard gravity, m/s². */
+export const GRAVITY = 9.80665
+
+const FORCE_AXES: readonly Axis[] = ['grip', 'scapulaSagittal', 'scapulaVertical', 'handAxial', 'lumbarAxial']
+const WRIST_AXES: readonly Axis[] = ['wristFlexion', 'wristDeviation']
+
+/**
+ * One muscle answer of one frame in the athlete's own numbers: value = alpha + beta·L, N·m or N, L in kg.
+ * Positive works as `positive`, negative as `negative`, against the strength of that action at the frame's angle.
+ */
+export interface Effort {
+  frame: number
+  axis: Axis
+  role: Role
+  alpha: number
+  beta: number
+  positive: Action | null
+  negative: Action | null
+  /** Strength of either action here; Infinity where the axis serves none. */
+  strengthPositive: number
+  strengthNegative: number
+}
+
+/** Factor on the best strength of an action at the posture's angle; 1 unless a published curve is in the rule set. */
+function angleFactor(
+  action: Action,
+  angles: Movement['solution']['frames'][number]['angles'],
+  ruleSet: RuleSet,
+): number {
+  let factor = 1
+  for (const curve of ruleSet.strength.angleCurves) {
+    if (curve.action === action) factor *= interpolate(curve.points, angles[curve.angle])
+  }
+  return factor
+}
+
+/** All muscle answers of an exercise for one athlete, frame by frame, in the order mechanics gives them. */
+export function effortsOf(
+  movement: Pick<Movement, 'mechanics' | 'solution'>,
+  athlete: Athlete,
+  ruleSet: RuleSet,
+  strength: Record<Action, number> = strengths(athlete, ruleSet),
+): Effort[] {
+  const body = athlete.bodyMass * GRAVITY
+  const { grip, gripFree } = movement.mechanics
+  const gripping = grip !== 'none' && !gripFree
+  const here = (
+    action: Action | null,
+    axis: Axis,
+    angles: Movement['solution']['frames'][number]['angles'],
+    role: Role,
+  ) => {
+    if (action === null) return Number.POSITIVE_INFINITY
+    const own = strength[action]
+    // A fist stiffens the wrist: the finger muscles that hold the load cross it.
+    const fist = gripping && WRIST_AXES.includes(axis) ? strength.grip * ruleSet.strength.grippingWristArm.value : 0
+    return (own + fist) * (role === 'idle' ? 1 : angleFactor(action, angles, ruleSet))
+  }
+  const efforts: Effort[] = []
+  movement.solution.frames.forEach((frame, index) => {
+    for (const term of frame.terms) {
+      const arm = FORCE_AXES.includes(term.axis) ? 1 : athlete.stature
+      const [positive, negative] = AXES[term.axis]
+      efforts.push({
+        frame: index,
+        axis: term.axis,
+        role: term.role,
+        alpha: body * arm * term.a,
+        beta: GRAVITY * arm * term.b,
+        positive,
+        negative,
+        strengthPositive: here(positive, term.axis, frame.angles, term.role),
+        strengthNegative: here(negative, term.axis, frame.angles, term.role),
+      })
+    }
+  })
+  return efforts
+}
+
+export const isForce = (action: Action): boolean => FORCE_ACTIONS.includes(action)
+
+/** Share of strength an effort takes at a load, with the action that answers; null for axes that no muscle answers. */
+export function demandOf(effort: Effort, load: number): { action: Action; demand: number } | null {
+  const value = effort.alpha + effort.beta * load
+  const action = value >= 0 ? effort.positive : effort.negative
+  if (action === null) return null
+  return { action, demand: value >= 0 ? value / effort.strengthPositive : -value / effort.strengthNegative }
+}
+
+/** The largest demand of each action over all frames and roles at a load. */
+export function demandsAt(efforts: readonly Effort[], load: number): Map<Action, number> {
+  const demands = new Map<Action, number>()
+  for (const effort of efforts) {
+    const answer = demandOf(effort, load)
+    if (answer && answer.demand > (demands.get(answer.action) ?? 0)) demands.set(answer.action, answer.demand)
+  }
+  return demands
+}
+
+/** The action nearest its strength at a load; null when nothing works. The first of equals in order of frames. */
+export function limiterAt(efforts: readonly Effort[], load: number): { action: Action; demand: number } | null {
+  let limiter: { action: Action; demand: number } | null = null
+  for (const effort of efforts) {
+    const answer = demandOf(effort, load)
+    if (answer && answer.demand > (limiter?.demand ?? 0)) limiter = answer
+  }
+  return limiter
+}
