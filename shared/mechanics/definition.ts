@@ -56,16 +56,22 @@ export interface Trunk {
 
 /**
  * An arm by its hand's place or by its joint angles.
- * `hand` is [along p, along q] from the shoulder in the arm plane. With `from: world` it is [x, z] for sagittal arms and
- * [outward, z] or [outward, z, x] for the others: their plane then holds both shoulders and both hands, and stands upright
- * when x is left out. For a gripping hand the place is
- * the middle of the grip, for a flat hand the wrist.
+ * `hand` is [along p, along q] from the shoulder in the arm plane; a third number lies off that plane (forward for frontal
+ * arms, outward for sagittal, toward the head for transverse), and the plane then turns about p to hold the hand.
+ * With `from: world` it is [x, z] for sagittal arms and [outward, z] or [outward, z, x] for the others: their plane then holds
+ * both shoulders and both hands, and stands upright when x is left out.
+ * For a gripping hand the place is the middle of the grip, for a flat hand the wrist.
+ * Angles with `from: world` (sagittal arms) count from the upright instead of from the trunk: shoulder 0 hangs straight down
+ * however far the trunk leans.
  */
-export type Arm = (
-  { hand: [number, number] | [number, number, number]; from?: 'trunk' | 'world' } | { shoulder: number; elbow: number }
-) & {
-  /** `reversed` folds the forearm the other way round in the arm plane (a forearm hanging from an abducted arm). */
-  elbowSide?: 'flexed' | 'reversed'
+export type Arm = ({ hand: [number, number] | [number, number, number] } | { shoulder: number; elbow: number }) & {
+  from?: 'trunk' | 'world'
+  /**
+   * `reversed` folds the forearm the other way round in the arm plane (a forearm hanging from an abducted arm).
+   * `across` is a nearly straight elbow whose hinge lies in the arm plane (a palm-down lateral raise): loads in that plane
+   * bend it sideways, which bone and ligament carry, and ask neither flexion nor extension of it.
+   */
+  elbowSide?: 'flexed' | 'reversed' | 'across'
   /** Bend of a gripping hand in the arm plane: flexion, or radial deviation where that is what the plane allows. */
   wrist?: number
   /** A hand flat on the ground, fingers along world +x (forward) or −x. */

@@ -37,6 +37,14 @@ function worldPlaneAxes(plane: ArmPlane, trunk: TrunkAxes, [, z, x = 0]: readonl
   return { p: trunk.lateral, q: along(trunk.forward) }
 }
 
+/** The arm plane turned about p so that it holds a hand that lies off it: forward, outward or toward the head. */
+function turnedPlaneAxes(plane: ArmPlane, trunk: TrunkAxes, [, v, off]: readonly [number, number, number]) {
+  const { p, q } = armPlaneAxes(plane, trunk)
+  const offPlane = { frontal: trunk.forward, sagittal: trunk.lateral, transverse: trunk.up }[plane]
+  const turned = unit(add(scale(q, v), scale(offPlane, off)))
+  return { p, q: v < 0 ? scale(turned, -1) : turned }
+}
+
 /**
  * What turning the hand in the arm plane toward growing θ means at the wrist, from where the palm faces.
  * Trade and anatomy, no source: in the anatomical position the palm looks forward, pronated it looks back,
@@ -74,6 +82,8 @@ export interface SolvedArm {
   plane: { p: Vector; q: Vector }
   /** +1 when elbow flexion turns the forearm toward growing θ in the plane, −1 when folded the other way. */
   elbowSign: 1 | -1
+  /** Whether the elbow's hinge lies in the plane, so that loads in the plane do not bend or straighten it. */
+  hingeAcross: boolean
   /** degrees */
   angles: { shoulder: number; elbow: number; wrist: number }
 }
@@ -98,6 +108,12 @@ function foldAngle({ first, second }: TwoLinks, distance: number, field: string)
   }
 }
 
+function planeOf(plane: ArmPlane, arm: Arm, trunk: TrunkAxes): { p: Vector; q: Vector } {
+  if (!('hand' in arm) || arm.hand === undefined) return armPlaneAxes(plane, trunk)
+  if (arm.from === 'world') return worldPlaneAxes(plane, trunk, arm.hand)
+  return arm.hand.length === 3 ? turnedPlaneAxes(plane, trunk, arm.hand) : armPlaneAxes(plane, trunk)
+}
+
 /**
  * Places one arm from its authored form.
  * @throws MechanicsError unreachable_endpoint when the hand's place is out of reach.
@@ -109,10 +125,7 @@ export function solveArm(
   setting: { plane: ArmPlane; grip: Grip; table: SegmentTable; field: string },
 ): SolvedArm {
   const { table, field } = setting
-  const plane =
-    'hand' in arm && arm.from === 'world'
-      ? worldPlaneAxes(setting.plane, trunk, arm.hand)
-      : armPlaneAxes(setting.plane, trunk)
+  const plane = planeOf(setting.plane, arm, trunk)
   const elbowSign = arm.elbowSide === 'reversed' ? -1 : 1
   const wristSign = WRIST_IN_PLANE[setting.plane][setting.grip === 'none' ? 'neutral' : setting.grip].sign
   const bend = arm.flat === undefined ? wristSign * radians(arm.wrist ?? 0) : 0
@@ -128,7 +141,10 @@ export function solveArm(
   if ('hand' in arm && arm.hand !== undefined) {
     const [u, v, x = 0] = arm.hand
     const target = setting.plane === 'sagittal' ? ([u, 0, v] as Vector) : add(scale(trunk.lateral, u), [x, 0, v])
-    const place: [number, number] = arm.from === 'world' ? [dot(target, plane.p), dot(target, plane.q)] : [u, v]
+    const place: [number, number] =
+      arm.from === 'world'
+        ? [dot(target, plane.p), dot(target, plane.q)]
+        : [u, arm.hand.length === 3 ? Math.hypot(v, x) * (v < 0 ? -1 : 1) : v]
     const { fold, atFirst } = foldAngle(
       { first: table.upperArm.length, second },
       Math.hypot(place[0], place[1]),
@@ -138,7 +154,15 @@ export function solveArm(
     lower = upper + elbowSign * fold - offset
   } else {
     const angles = arm as { shoulder: number; elbow: number }
-    upper = radians(angles.shoulder)
+    if (arm.from === 'world' && setting.plane !== 'sagittal') {
+      throw new MechanicsError(
+        'unsupported_combination',
+        `${field}.from`,
+        'Only sagittal arms can take their angles from the upright.',
+      )
+    }
+    const lean = arm.from === 'world' ? Math.atan2(trunk.up[0], trunk.up[2]) : 0
+    upper = radians(angles.shoulder) + lean
     lower = upper + elbowSign * radians(angles.elbow)
   }
 
@@ -158,6 +182,7 @@ export function solveArm(
     handDirection,
     plane,
     elbowSign,
+    hingeAcross: arm.elbowSide === 'across',
     angles: {
       shoulder: turn(degrees(upper) - 90) + 90,
       elbow: elbowSign * turn(degrees(lower - upper)),

@@ -80,7 +80,13 @@ function cutsOf(mechanics: ExerciseMechanics, posture: Posture): Cut[] {
         name: 'elbow',
         limb,
         at: arm.elbow,
-        read: [{ axis: 'elbow', direction: scale(armAxis, arm.elbowSign), kind: 'moment' }],
+        read: [
+          {
+            axis: 'elbow',
+            direction: arm.hingeAcross ? unit(cross(armAxis, forearm)) : scale(armAxis, arm.elbowSign),
+            kind: 'moment',
+          },
+        ],
       },
       {
         name: 'shoulder',
@@ -122,8 +128,9 @@ export function jointTerms(
 ): Term[] {
   const terms: Term[] = []
   for (const cut of cutsOf(mechanics, posture)) {
-    const body = cutWrench(sets.body, restsOn, ALL_SEGMENTS, cut)
-    const load = cutWrench(sets.load, restsOn, ALL_SEGMENTS, cut)
+    const mirrored = mechanics.sides === 'both' && cut.limb !== undefined
+    const body = cutWrench(sets.body, restsOn, ALL_SEGMENTS, { ...cut, mirrored })
+    const load = cutWrench(sets.load, restsOn, ALL_SEGMENTS, { ...cut, mirrored })
     if (!body || !load) continue
     for (const { axis, direction, kind } of cut.read) {
       const reports = axis === 'handAxial' || axis === 'lumbarAxial'
