@@ -17,7 +17,7 @@ const arm = z
   .strictObject({
     hand: z.union([pair, z.tuple([fraction, fraction, fraction])]).optional(),
     from: z.enum(['trunk', 'world']).optional(),
-    elbowSide: z.enum(['flexed', 'reversed']).optional(),
+    elbowSide: z.enum(['flexed', 'reversed', 'across']).optional(),
     shoulder: angle.optional(),
     elbow: angle.optional(),
     wrist: z.number().min(-90).max(90).optional(),

@@ -64,11 +64,15 @@ function footContact(leg: SolvedLeg, footPoint: number | undefined): Vector {
 export const rests = (mechanics: ExerciseMechanics): boolean =>
   mechanics.supports.some((support) => !SOLVABLE.includes(support))
 
-/** Segments whose load on a pad, or on a contact beside a pad, cannot be told from statics. */
+/**
+ * Segments whose load on a pad, or on a contact beside a pad, cannot be told from statics.
+ * Legs that push a load away with their feet lift off the seat: then it holds the pelvis alone.
+ */
 export function restingSegments(mechanics: ExerciseMechanics): (segment: SegmentRef) => boolean {
   if (!rests(mechanics)) return () => false
+  const legsPush = mechanics.loads.some((load) => load.at === 'feet')
   const groups = mechanics.supports.map((support): ((segment: SegmentRef) => boolean) => {
-    const names = RESTING[support]
+    const names = support === 'seat' && legsPush ? RESTING.seat?.filter((name) => name !== 'thigh') : RESTING[support]
     if (names) return (segment) => names.includes(segment.name)
     const limbs = bearingLimbs(mechanics, support)
     const name = BEARING_SEGMENT[support as keyof typeof BEARING_SEGMENT]

@@ -60,17 +60,28 @@ export function reactions(groups: readonly ContactGroup[], applied: readonly For
 /**
  * Net external force and moment on the distal side of a cut, about a point, taken from the side without an unknown pad.
  * Undefined when pads hold both sides: then nothing can be said, and nothing is asked of the joint.
+ *
+ * Where both limbs do the same (`mirrored`) and pads hold nothing but the two of them, as on a back extension bench, each
+ * limb's joint takes half of what the rest of the body asks.
  */
 export function cutWrench(
   all: readonly Force[],
   restsOn: (segment: SegmentRef) => boolean,
   segments: readonly SegmentRef[],
-  cut: { name: CutName; limb?: LimbIndex; at: Vector },
+  cut: { name: CutName; limb?: LimbIndex; mirrored?: boolean; at: Vector },
 ): { force: Vector; moment: Vector } | undefined {
   const distal = (segment: SegmentRef) => isDistal(segment, cut.name, cut.limb)
   const heldDistally = segments.some((segment) => restsOn(segment) && distal(segment))
   const heldProximally = segments.some((segment) => restsOn(segment) && !distal(segment))
-  if (heldDistally && heldProximally) return undefined
+  if (heldDistally && heldProximally) {
+    const ofPair = (segment: SegmentRef) => isDistal(segment, cut.name, 0) || isDistal(segment, cut.name, 1)
+    if (!cut.mirrored || segments.some((segment) => restsOn(segment) && !ofPair(segment))) return undefined
+    const rest = wrench(
+      all.filter((force) => !ofPair(force.segment)),
+      [cut.at[0], 0, cut.at[2]],
+    )
+    return { force: scale(rest.force, -0.5), moment: scale(rest.moment, -0.5) }
+  }
   const side = all.filter((force) => distal(force.segment) !== heldDistally)
   const sum = wrench(side, cut.at)
   return heldDistally ? { force: scale(sum.force, -1), moment: scale(sum.moment, -1) } : sum
