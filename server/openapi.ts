@@ -1,20 +1,14 @@
-import {
-  extendZodWithOpenApi,
-  OpenApiGeneratorV31,
-  OpenAPIRegistry,
-  type RouteConfig,
-} from '@asteasolutions/zod-to-openapi'
+import { OpenApiGeneratorV31, OpenAPIRegistry, type RouteConfig } from '@asteasolutions/zod-to-openapi'
 import { Router } from 'express'
 import { z } from 'zod'
 import { errorBody } from '#shared/contract/common'
 import type { Endpoint } from '#shared/contract/endpoint'
 import { ENDPOINTS } from '#shared/contract/index'
 
-extendZodWithOpenApi(z)
-
 const JSON_TYPE = 'application/json'
+const ERROR = { $ref: '#/components/schemas/Error' }
 
-function toRoute(feature: string, name: string, endpoint: Endpoint, error: z.ZodType): RouteConfig {
+function toRoute(feature: string, name: string, endpoint: Endpoint): RouteConfig {
   const status = endpoint.status ?? (endpoint.response === undefined ? 204 : 200)
   const description = endpoint.response === undefined ? 'Done; no body.' : 'Done.'
   return {
@@ -36,7 +30,7 @@ function toRoute(feature: string, name: string, endpoint: Endpoint, error: z.Zod
           : { description, content: { [JSON_TYPE]: { schema: endpoint.response } } },
       default: {
         description: 'Refused or failed; `error.code` says why.',
-        content: { [JSON_TYPE]: { schema: error } },
+        content: { [JSON_TYPE]: { schema: ERROR } },
       },
     },
   }
@@ -45,9 +39,10 @@ function toRoute(feature: string, name: string, endpoint: Endpoint, error: z.Zod
 /** The OpenAPI 3.1 document of the whole API, made from the contract. */
 export function createOpenApiDocument() {
   const registry = new OpenAPIRegistry()
-  const error = registry.register('Error', errorBody)
+  const { $schema: _dialect, ...error } = z.toJSONSchema(errorBody)
+  registry.registerComponent('schemas', 'Error', error as Parameters<typeof registry.registerComponent<'schemas'>>[2])
   registry.registerComponent('securitySchemes', 'accessCookie', { type: 'apiKey', in: 'cookie', name: 'pintle_access' })
-  for (const { feature, name, endpoint } of ENDPOINTS) registry.registerPath(toRoute(feature, name, endpoint, error))
+  for (const { feature, name, endpoint } of ENDPOINTS) registry.registerPath(toRoute(feature, name, endpoint))
   return new OpenApiGeneratorV31(registry.definitions).generateDocument({
     openapi: '3.1.0',
     info: {

@@ -85,7 +85,9 @@ export function methodNotAllowed(): Array<{ path: string; handler: RequestHandle
   for (const { endpoint } of ENDPOINTS) {
     byPath.set(endpoint.path, (byPath.get(endpoint.path) ?? new Set<string>()).add(endpoint.method))
   }
-  return [...byPath].map(([path, methods]) => ({
+  // A path without parameters also matches its neighbour with one, so it must come first.
+  const inOrder = [...byPath].toSorted(([a], [b]) => a.split(':').length - b.split(':').length)
+  return inOrder.map(([path, methods]) => ({
     path,
     handler: (_request, response) => {
       response.setHeader('Allow', [...methods].join(', '))
