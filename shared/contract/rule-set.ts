@@ -57,7 +57,17 @@ export const ruleSet = z.strictObject({
   }),
   strength: z.strictObject({
     /** N·m per side (whole trunk and neck), N for grip and the scapular actions. */
-    norms: every(ACTIONS, cited(bySex(positive))),
+    norms: every(
+      ACTIONS,
+      z.strictObject({
+        value: bySex(positive),
+        /** Measured while moving; isometric when left out. */
+        moving: z.literal(true).optional(),
+        ...provenance,
+      }),
+    ),
+    /** Share of isometric strength left to a joint that moves, in full from an excursion (degrees) on. */
+    moving: cited(z.strictObject({ share, fullAt: positive })),
     /** Arm (m) over the wrist of the finger muscles that grip, which stiffen a wrist that holds something. */
     grippingWristArm: cited(share),
     /** How a moment and a force grow with body mass: strength × (mass ÷ norm mass)^exponent. */

@@ -5,6 +5,7 @@ import { capsFromSoreness, isRedFlagged } from './caps'
 import { tightestBySide } from './joint-stress'
 import { groupDrive, groupRoleIn } from './muscles'
 import { planned, prepare, type Planned } from './original'
+import { muscleLoads } from './score'
 import { strengths } from './strength'
 import type { Cap, RankRequest, SoreJointInput } from './types'
 
@@ -16,6 +17,8 @@ export interface RankContext {
   original: Planned
   /** Target drive of the original done healthy. */
   originalDrive: number
+  /** What the original asks of every muscle. */
+  originalLoads: readonly number[]
   caps: readonly Cap[]
   /** Reports that bind by their cap, and those that stop training of their joint. */
   sore: readonly SoreJointInput[]
@@ -57,6 +60,7 @@ export function contextOf(request: RankRequest, ruleSet: RuleSet): RankContext {
     strength,
     original,
     originalDrive: limit === 0 ? 0 : drive / limit,
+    originalLoads: muscleLoads(original.demands, request.original.document.mechanics.grip, ruleSet),
     caps: capsFromSoreness(standing, ruleSet),
     sore: standing,
     flagged,

@@ -1,6 +1,7 @@
 import type { RuleSet } from '../contract/rule-set'
-import { AXES, type Axis, type Role } from '../mechanics/solution'
-import { FORCE_ACTIONS, type Action } from '../mechanics/vocabulary'
+import { AXES, type Axis, type PoseAngles, type Role, type Term } from '../mechanics/solution'
+import { ACTION_JOINT, FORCE_ACTIONS, type Action } from '../mechanics/vocabulary'
+import { motionOf, movingStrength, type Motion } from './motion'
 import { interpolate } from './numbers'
 import { strengths } from './strength'
 import type { Athlete, Movement } from './types'
@@ -29,11 +30,7 @@ export interface Effort {
 }
 
 /** Factor on the best strength of an action at the posture's angle; 1 unless a published curve is in the rule set. */
-function angleFactor(
-  action: Action,
-  angles: Movement['solution']['frames'][number]['angles'],
-  ruleSet: RuleSet,
-): number {
+function angleFactor(action: Action, angles: PoseAngles, ruleSet: RuleSet): number {
   let factor = 1
   for (const curve of ruleSet.strength.angleCurves) {
     if (curve.action === action) factor *= interpolate(curve.points, angles[curve.angle])
@@ -47,21 +44,20 @@ export function effortsOf(
   athlete: Athlete,
   ruleSet: RuleSet,
   strength: Record<Action, number> = strengths(athlete, ruleSet),
+  motion: Motion = motionOf(movement.solution),
 ): Effort[] {
+  const rules = ruleSet.strength
   const body = athlete.bodyMass * GRAVITY
   const { grip, gripFree } = movement.mechanics
   const gripping = grip !== 'none' && !gripFree
-  const here = (
-    action: Action | null,
-    axis: Axis,
-    angles: Movement['solution']['frames'][number]['angles'],
-    role: Role,
-  ) => {
+  const here = (action: Action | null, term: Term, angles: PoseAngles) => {
     if (action === null) return Number.POSITIVE_INFINITY
-    const own = strength[action]
     // A fist stiffens the wrist: the finger muscles that hold the load cross it.
-    const fist = gripping && WRIST_AXES.includes(axis) ? strength.grip * ruleSet.strength.grippingWristArm.value : 0
-    return (own + fist) * (role === 'idle' ? 1 : angleFactor(action, angles, ruleSet))
+    const fist = gripping && WRIST_AXES.includes(term.axis) ? strength.grip * rules.grippingWristArm.value : 0
+    const moved =
+      FORCE_ACTIONS.includes(action) || rules.norms[action].moving ? 0 : motion[term.role][ACTION_JOINT[action]]
+    const angled = term.role === 'idle' ? 1 : angleFactor(action, angles, ruleSet)
+    return (strength[action] + fist) * movingStrength(moved, ruleSet) * angled
   }
   const efforts: Effort[] = []
   movement.solution.frames.forEach((frame, index) => {
@@ -76,8 +72,8 @@ export function effortsOf(
         beta: GRAVITY * arm * term.b,
         positive,
         negative,
-        strengthPositive: here(positive, term.axis, frame.angles, term.role),
-        strengthNegative: here(negative, term.axis, frame.angles, term.role),
+        strengthPositive: here(positive, term, frame.angles),
+        strengthNegative: here(negative, term, frame.angles),
       })
     }
   })

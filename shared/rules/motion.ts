@@ -51,10 +51,25 @@ export function excursion(solution: ExerciseSolution, joint: Joint, role: Role):
   return spread(solution.frames.map(({ angles }) => angles[ANGLE_OF[joint]]))
 }
 
-/** How much of a joint's demand counts as stress: least when held still, in full from a set excursion on. */
-export function motionFactors(solution: ExerciseSolution, role: Role, ruleSet: RuleSet): Record<Joint, number> {
+/** Excursion of every joint (degrees) for each part of the body in a one-sided exercise. */
+export type Motion = Record<Role, Record<Joint, number>>
+
+/** Measures every joint's excursion once. */
+export function motionOf(solution: ExerciseSolution): Motion {
+  const of = (role: Role) =>
+    Object.fromEntries(JOINTS.map((joint) => [joint, excursion(solution, joint, role)])) as Record<Joint, number>
+  const working = of('working')
+  return { working, idle: of('idle'), middle: working }
+}
+
+/** How much of a demand counts as stress: least when the joint is held still, in full from a set excursion on. */
+export function stressFactor(degrees: number, ruleSet: RuleSet): number {
   const { still, fullAt } = ruleSet.stress.motion.value
-  return Object.fromEntries(
-    JOINTS.map((joint) => [joint, still + (1 - still) * clamp(excursion(solution, joint, role) / fullAt, 0, 1)]),
-  ) as Record<Joint, number>
+  return still + (1 - still) * clamp(degrees / fullAt, 0, 1)
+}
+
+/** How much of its isometric strength a joint has left for moving this far. */
+export function movingStrength(degrees: number, ruleSet: RuleSet): number {
+  const { share, fullAt } = ruleSet.strength.moving.value
+  return 1 - (1 - share) * clamp(degrees / fullAt, 0, 1)
 }

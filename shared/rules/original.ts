@@ -3,6 +3,7 @@ import type { Dose } from '../contract/session'
 import { inRepetitions, intensity } from './dose'
 import { demandsAt, effortsOf, limiterAt, type Effort } from './efforts'
 import { loadRange, strengthBounds } from './load-range'
+import { motionOf } from './motion'
 import { strengths } from './strength'
 import { strainsOf, type Strain } from './stress'
 import type { Athlete, Candidate } from './types'
@@ -23,8 +24,9 @@ export function prepare(
   strength: Record<Action, number> = strengths(athlete, ruleSet),
 ): Prepared {
   const movement = { mechanics: candidate.document.mechanics, solution: candidate.solution }
-  const efforts = effortsOf(movement, athlete, ruleSet, strength)
-  return { candidate, efforts, strains: strainsOf(movement, efforts, athlete, ruleSet) }
+  const motion = motionOf(candidate.solution)
+  const efforts = effortsOf(movement, athlete, ruleSet, strength, motion)
+  return { candidate, efforts, strains: strainsOf(movement, efforts, athlete, ruleSet, motion) }
 }
 
 /** A planned exercise as a healthy athlete would do it. */

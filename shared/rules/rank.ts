@@ -2,7 +2,7 @@ import type { RuleSet } from '../contract/rule-set'
 import type { LeftOutRow, SwapRow } from '../contract/swap'
 import { capOfRating } from './caps'
 import { contextOf, type RankContext } from './context'
-import { asJointStress, isOver } from './joint-stress'
+import { asJointStress } from './joint-stress'
 import { groupDrive } from './muscles'
 import { rate, redFlagReason, shownJoints } from './rate'
 import type { Candidate, RankRequest, RankResult } from './types'
@@ -40,17 +40,22 @@ function originalRow(context: RankContext): RankResult['originalRow'] {
 }
 
 /**
- * Whether the original may stand among its own swaps: only when a sore joint puts it over a cap as planned, so that a
- * lighter dose of it is a change. Unaffected, it is what the athlete came from.
+ * Whether the original may stand among its own swaps: only when it loads a sore joint, with the dose that fits under the caps,
+ * so that it can be compared with what would spare the joint. A dose that comes out as planned is no swap and is dropped.
  */
-const mayReturn = (context: RankContext): boolean =>
-  shownJoints(context.original, context, context.original.load).some(isOver)
-
-/** The candidates a ranking looks at: all but an original that needs no change. */
 export function consideredIn(context: RankContext): readonly Candidate[] {
-  const { candidates, original } = context.request
-  return mayReturn(context) ? candidates : candidates.filter(({ id }) => id !== original.id)
+  const { original, ruleSet, request } = context
+  const loaded = shownJoints(original, context, original.load).some(
+    ({ cap, stress }) => cap !== null && stress >= ruleSet.caps.loadedFrom.value,
+  )
+  return loaded ? request.candidates : request.candidates.filter(({ id }) => id !== original.candidate.id)
 }
+
+/** Whether a row only repeats the original as planned. */
+export const repeatsOriginal = (
+  { exercise, dose }: Unranked,
+  { request: { original, planned } }: RankContext,
+): boolean => exercise.id === original.id && dose.load === planned.load && dose.repetitions === planned.repetitions
 
 /** Puts rows and left-outs in their order and adds what the page needs to know about the athlete. */
 export function resultOf(context: RankContext, rows: Unranked[], leftOut: LeftOutRow[]): RankResult {
@@ -108,8 +113,9 @@ export function rank(request: RankRequest, ruleSet: RuleSet): RankResult {
   const leftOut: LeftOutRow[] = []
   for (const candidate of consideredIn(context)) {
     const rated = rate(candidate, context)
-    if ('row' in rated) rows.push(rated.row)
-    else leftOut.push(rated.leftOut)
+    if ('row' in rated) {
+      if (!repeatsOriginal(rated.row, context)) rows.push(rated.row)
+    } else leftOut.push(rated.leftOut)
   }
   return resultOf(context, rows, leftOut)
 }

@@ -161,8 +161,7 @@ export function rate(candidate: Candidate, context: RankContext): Rated {
       grip,
       tightest: shown,
     },
-    original,
-    context.originalDrive,
+    { drive: context.originalDrive, muscleLoads: context.originalLoads },
     request,
     ruleSet,
   )

@@ -5,6 +5,7 @@ import type { Tightest } from './joint-stress'
 import { excursion } from './motion'
 import { groupRoleIn } from './muscles'
 import { ACTION_NAMES, capital, jointName, kilograms, percent, percentOver, TARGET_NAMES } from './names'
+import { AS_PLANNED } from './score'
 import type { Candidate, RankRequest } from './types'
 
 /** A joint that moves less than this through a repetition is held still, degrees. */
@@ -17,7 +18,7 @@ const OWN = 0.7
 /** How a capped joint fares, as the verb after its name. */
 function bearing(solution: ExerciseSolution, { joint, channel }: Tightest): string {
   if (channel === 'gripPull' || channel === 'grip') return 'is asked most by the grip'
-  if (channel === 'leaning') return joint === 'lowerBack' ? 'bears weight' : 'is leaned on'
+  if (channel === 'leaning') return joint === 'lowerBack' ? 'is pressed together' : 'is leaned on'
   if (channel === 'endRange') return 'works at the end of its range'
   const moved = Math.round(excursion(solution, joint, 'working'))
   const hinge = joint === 'elbow' || joint === 'knee' ? joint : null
@@ -26,6 +27,12 @@ function bearing(solution: ExerciseSolution, { joint, channel }: Tightest): stri
     return straight ? 'stays nearly straight' : 'is held still'
   }
   return hinge === null ? `moves through ${moved}°` : `bends through ${moved}°`
+}
+
+/** What a stress is a share of. */
+function ofWhat({ joint, channel }: Tightest): string {
+  if (channel !== 'leaning') return 'its strength'
+  return joint === 'lowerBack' ? 'the most a back at work should bear' : 'a handstand’s weight'
 }
 
 /** Why a swap stands where it stands, from its own numbers. */
@@ -47,10 +54,10 @@ export function swapReason(
   if (row.tightest !== null && row.tightest.cap !== null) {
     const { joint, side, stress, cap } = row.tightest
     sentences.push(
-      `Your ${jointName(joint, side)} ${bearing(candidate.solution, row.tightest)}, at ${percent(stress)} of its strength; the cap is ${percent(cap)}.`,
+      `Your ${jointName(joint, side)} ${bearing(candidate.solution, row.tightest)}, at ${percent(stress)} of ${ofWhat(row.tightest)}; the cap is ${percent(cap)}.`,
     )
   }
-  if (row.keptIntensity < 0.95) sentences.push(`It keeps ${percent(row.keptIntensity)} of the planned intensity.`)
+  if (row.keptIntensity < AS_PLANNED) sentences.push(`It keeps ${percent(row.keptIntensity)} of the planned intensity.`)
   return sentences.join(' ')
 }
 

@@ -1,10 +1,10 @@
 import type { RuleSet } from '../contract/rule-set'
 import type { SwapRow } from '../contract/swap'
-import { ACTIONS, type Action } from '../mechanics/vocabulary'
+import { ACTIONS, type Action, type Grip } from '../mechanics/vocabulary'
 import type { Tightest } from './joint-stress'
-import { groupRoleIn } from './muscles'
+import { MUSCLES } from './muscle-names'
+import { groupRoleIn, roleIn } from './muscles'
 import { ACTION_NAMES, jointName, percent, TARGET_NAMES } from './names'
-import type { Planned } from './original'
 import type { RankRequest } from './types'
 
 type Factors = SwapRow['factors']
@@ -13,6 +13,9 @@ type Demands = ReadonlyMap<Action, number>
 
 /** Below this much demand elsewhere the rest of the body is said to have little to do. */
 const LITTLE = 0.6
+
+/** From here on the planned intensity counts as reached; the rest is whole repetitions. */
+export const AS_PLANNED = 0.95
 
 /** What the score of one swap is made from. */
 export interface ScoreInput {
@@ -23,7 +26,7 @@ export interface ScoreInput {
   unit: 'repetitions' | 'seconds'
   demands: Demands
   coordination: number
-  grip: Planned['candidate']['document']['mechanics']['grip']
+  grip: Grip
   tightest: readonly Tightest[]
 }
 
@@ -41,7 +44,7 @@ function kept(input: ScoreInput, originalDrive: number, request: RankRequest, ru
   const length = unit === 'seconds' ? `${repetitions} s` : `${repetitions} repetitions`
   const before = planned.unit === 'seconds' ? `${planned.repetitions} s` : `${planned.repetitions}`
   const effort =
-    keptIntensity < 0.995
+    keptIntensity < AS_PLANNED
       ? `${percent(keptIntensity)} of the planned intensity`
       : changed
         ? `planned intensity reached with ${length} instead of ${before}`
@@ -107,14 +110,26 @@ function lean({ demands, grip }: ScoreInput, target: RankRequest['target'], rule
   return { value: leanOf(rest, ruleSet), note }
 }
 
-/** Cosine of two movements' action demands, 0–1; 0 when either does no work. */
-export function likeness(one: Demands, other: Demands): number {
+/** What action demands ask of every muscle: Σ role × demand, in the order of the muscles' list. */
+export function muscleLoads(demands: Demands, grip: Grip, ruleSet: RuleSet): number[] {
+  return MUSCLES.map((muscle) => {
+    let sum = 0
+    for (const action of ACTIONS) sum += roleIn(action, muscle, grip, ruleSet) * (demands.get(action) ?? 0)
+    return sum
+  })
+}
+
+/**
+ * Cosine of two movements' action demands, 0–1; 0 when either does no work. Taken over what the actions ask of the muscles, so
+ * that pulling down in the sagittal and in the frontal plane count as kin and not as strangers.
+ */
+export function likeness(one: readonly number[], other: readonly number[]): number {
   let dot = 0
   let first = 0
   let second = 0
-  for (const action of ACTIONS) {
-    const u = one.get(action) ?? 0
-    const v = other.get(action) ?? 0
+  for (let i = 0; i < one.length; i++) {
+    const u = one[i] ?? 0
+    const v = other[i] ?? 0
     dot += u * v
     first += u * u
     second += v * v
@@ -122,28 +137,27 @@ export function likeness(one: Demands, other: Demands): number {
   return first === 0 || second === 0 ? 0 : Math.min(1, dot / Math.sqrt(first * second))
 }
 
-function carryOver(demands: Demands, original: Planned, ruleSet: RuleSet): Factor {
-  const alike = likeness(demands, original.demands)
+function carryOver({ demands, grip }: ScoreInput, originalLoads: readonly number[], ruleSet: RuleSet): Factor {
+  const alike = likeness(muscleLoads(demands, grip, ruleSet), originalLoads)
   return {
     value: 1 - ruleSet.score.carryOver.value * (1 - alike),
-    note: `works the joints ${percent(alike)} like the original`,
+    note: `works the body ${percent(alike)} like the original`,
   }
 }
 
 /** The named factors of a swap's score, each 0–1 with the words for its number. */
 export function factorsOf(
   input: ScoreInput,
-  original: Planned,
-  originalDrive: number,
+  original: { drive: number; muscleLoads: readonly number[] },
   request: RankRequest,
   ruleSet: RuleSet,
 ): Factors {
   return {
-    kept: kept(input, originalDrive, request, ruleSet),
+    kept: kept(input, original.drive, request, ruleSet),
     spare: spare(input.tightest, ruleSet),
     calm: calm(input.coordination, request.intent, ruleSet),
     lean: lean(input, request.target, ruleSet),
-    carryOver: carryOver(input.demands, original, ruleSet),
+    carryOver: carryOver(input, original.muscleLoads, ruleSet),
   }
 }
 

@@ -1,7 +1,7 @@
 import type { RuleSet } from '../contract/rule-set'
 import { ACTION_JOINT, type Action, type Joint } from '../mechanics/vocabulary'
 import { GRAVITY, type Effort } from './efforts'
-import { motionFactors } from './motion'
+import { motionOf, stressFactor, type Motion } from './motion'
 import { clamp, power } from './numbers'
 import type { Athlete, Movement, StressChannel } from './types'
 
@@ -46,13 +46,9 @@ export function strainsOf(
   efforts: readonly Effort[],
   athlete: Athlete,
   ruleSet: RuleSet,
+  motion: Motion = motionOf(movement.solution),
 ): Strain[] {
   const rules = ruleSet.stress
-  const still = {
-    working: motionFactors(movement.solution, 'working', ruleSet),
-    idle: motionFactors(movement.solution, 'idle', ruleSet),
-    middle: motionFactors(movement.solution, 'middle', ruleSet),
-  }
   const push = pushReference(athlete, ruleSet)
   const strains: Strain[] = []
   const add = (joint: Joint, channel: StressChannel, frame: number, constant: number, slope: number) => {
@@ -80,7 +76,7 @@ export function strainsOf(
         add('elbow', 'gripPull', frame, constant * elbow, slope * elbow)
         continue
       }
-      const factor = still[role][joint]
+      const factor = stressFactor(motion[role][joint], ruleSet)
       add(joint, action, frame, constant * factor, slope * factor)
       if (role === 'idle' || WITHOUT_RANGE.includes(action)) continue
       const severity = endRange(movement, frame, joint, ruleSet)
