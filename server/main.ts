@@ -4,6 +4,7 @@ import type { Express } from 'express'
 import { createApp } from './app'
 import { createDependencies, type Dependencies } from './dependencies'
 import { parseEnv, publicUrl, type Env } from './env'
+import { demoAccounts } from './features/auth/demo-accounts'
 import type { MailFake } from './mail/fake/start'
 
 /** How long requests that are under way may take once the server was told to stop. */
@@ -21,6 +22,17 @@ async function startLocalMail(env: Env): Promise<MailFake | null> {
   if (env.SMTP_URL !== 'local') return null
   const { startMailFake } = await import('./mail/fake/start')
   return startMailFake({ pagePort: env.MAIL_PAGE_PORT })
+}
+
+/** One line per demo person, with the clubs they are in. */
+function accountLines(env: Env): string[] {
+  const accounts = demoAccounts(env)
+  const people = accounts.filter(({ email }, index) => accounts.findIndex((other) => other.email === email) === index)
+  const lines = people.map(({ name, email, password, role }) => {
+    const clubs = accounts.filter((other) => other.email === email).map(({ clubName }) => clubName)
+    return `  ${role.padEnd(8)} ${email.padEnd(32)} ${password.padEnd(24)} ${name}, ${clubs.join(' and ')}`
+  })
+  return lines.length === 0 ? [] : ['Demo accounts (invented people):', ...lines]
 }
 
 async function stop(server: Server, { background, dataSource, logger, mailer }: Dependencies, mail: MailFake | null) {
@@ -59,6 +71,7 @@ async function main(): Promise<void> {
   }
   const { port } = server.address() as AddressInfo
   dependencies.logger.info({ port }, 'listening')
+  for (const line of accountLines(env)) tell(line)
   if (mail !== null) tell(`Mails are not delivered but kept; read them at ${mail.pageUrl}`)
   tell(`Pintle is ready at ${publicUrl(env)}`)
 }

@@ -1,8 +1,8 @@
 import { z } from 'zod'
-import { email, password } from './common'
+import { email, list, password } from './common'
 import { endpoint } from './endpoint'
 import { LIMITS } from './limits'
-import { me } from './me'
+import { me, role } from './me'
 
 export const signIn = endpoint({
   method: 'POST',
@@ -42,4 +42,15 @@ export const resetPassword = endpoint({
   summary: 'Set a new password with the token from the mail; ends every session of that user.',
   access: 'public',
   body: z.object({ token: z.string().min(20).max(200), password }),
+})
+
+export const demoAccount = z.object({ name: z.string(), email, password: z.string(), role, clubName: z.string() })
+export type DemoAccount = z.infer<typeof demoAccount>
+
+export const listDemoAccounts = endpoint({
+  method: 'GET',
+  path: '/api/auth/demo-accounts',
+  summary: 'The invented accounts of a demo, for its sign-in page. Empty everywhere else.',
+  access: 'public',
+  response: list(demoAccount),
 })

@@ -6,6 +6,7 @@ import { mountPublic } from '../../middleware/mount'
 import { limitRate } from '../../middleware/rate-limit'
 import { readMe } from '../me/service'
 import { clearSessionCookies, readAccessCookie, readRefreshCookie, setSessionCookies } from './cookies'
+import { demoAccounts } from './demo-accounts'
 import { requestPasswordReset, resetPassword } from './password-reset'
 import { refreshSession, signIn, signOut } from './session'
 
@@ -57,6 +58,8 @@ export function authRoutes(dependencies: Dependencies): Router {
       clearSessionCookies(context.response, env)
     },
   )
+
+  mountPublic(router, contract.listDemoAccounts, [], () => ({ items: demoAccounts(env), nextCursor: null }))
 
   return router
 }
