@@ -1,12 +1,12 @@
 import { segmentBodies } from './bodies'
-import { contactGroups, type ContactGroup } from './contacts'
+import { contactGroups, UPRIGHT, type ContactGroup } from './contacts'
 import type { Arm, Balance, ExerciseMechanics, Frame, Leg } from './definition'
 import { atReference, groupCentre, pressureOffset, reactions } from './equilibrium'
 import { MechanicsError } from './errors'
 import { gravityForces, loadForces, type Force } from './loads'
 import { solvePosture, type Posture } from './posture'
 import type { SegmentTable } from './segments'
-import { radians } from './vector'
+import { dot, radians } from './vector'
 
 /** How far a bearing may miss its place before the posture is refused, in fractions of stature (1 cm for a tall adult). */
 const TOLERANCE = 0.006
@@ -71,6 +71,7 @@ function loaded(mechanics: ExerciseMechanics, frame: Frame, table: SegmentTable,
 function imbalance(mechanics: ExerciseMechanics, { groups, body, load }: LoadedPosture): number {
   const [first, second] = groups
   if (!first) return 0
+  if (second && mechanics.firstPushes === 'squareToTrunk') return 0
   if (second) return groupCentre(first)[2] - groupCentre(second)[2] - (mechanics.rise ?? 0)
   return pressureOffset(atReference(mechanics, body, load), groupCentre(first))
 }
@@ -88,6 +89,13 @@ export function solveBalance(
   const { balance } = mechanics
   const at = (by: number) => loaded(mechanics, balance ? withBalance(frame, balance.solve, by) : frame, table, path)
   const authored = at(0)
+  if (balance && mechanics.firstPushes === 'squareToTrunk') {
+    throw new MechanicsError(
+      'unsupported_combination',
+      'balance',
+      'A back against a wall or pad is held at any lean: leave the balance out.',
+    )
+  }
   if (authored.groups.length === 0) {
     if (balance) {
       throw new MechanicsError(
@@ -179,14 +187,15 @@ function checkHeld(mechanics: ExerciseMechanics, solved: LoadedPosture, path: st
     }
     const held = reactions(groups, applied)
     for (const group of groups) {
-      const upright = held
+      const direction = group === first ? group.push : UPRIGHT
+      const pushed = held
         .filter((force) => group.contacts.some((contact) => contact.at === force.at))
-        .reduce((sum, force) => sum + force.force[2], 0)
-      if (upright < 0) {
+        .reduce((sum, force) => sum + dot(force.force, direction), 0)
+      if (pushed < 0) {
         throw new MechanicsError(
           'unloaded_contact',
           path,
-          `The ${group.support} would have to pull down to hold this posture.`,
+          `The ${group.support} would have to pull to hold this posture.`,
         )
       }
     }

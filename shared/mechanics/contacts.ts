@@ -1,7 +1,7 @@
 import type { LimbIndex, SegmentRef } from './bodies'
 import type { ExerciseMechanics } from './definition'
 import { MechanicsError } from './errors'
-import type { SolvedLeg } from './limbs'
+import type { SolvedLeg } from './leg'
 import type { Posture } from './posture'
 import type { Vector } from './solution'
 import { between } from './vector'
@@ -40,6 +40,8 @@ export interface Contact {
 export interface ContactGroup {
   support: Support
   contacts: Contact[]
+  /** Unit direction of the force it gives as the first of two. */
+  push: Vector
 }
 
 /** Pressure centre of a foot flat on the ground, share of its length from the heel (quiet standing; from memory, medium). */
@@ -59,6 +61,9 @@ function footContact(leg: SolvedLeg, footPoint: number | undefined): Vector {
   if (leg.soleAngle < -STEEP) return leg.heel
   return between(leg.heel, leg.toe, footPoint ?? MID_FOOT)
 }
+
+/** The way the ground pushes. */
+export const UPRIGHT: Vector = [0, 0, 1]
 
 /** Whether any support of the exercise is a pad or seat, which holds an unknown share. */
 export const rests = (mechanics: ExerciseMechanics): boolean =>
@@ -115,8 +120,10 @@ export function contactGroups(mechanics: ExerciseMechanics, posture: Posture): C
       'Statics can share weight between two supports at most.',
     )
   }
+  const push = mechanics.firstPushes === 'squareToTrunk' ? posture.trunkAxes.forward : UPRIGHT
   return mechanics.supports.map((support) => ({
     support,
+    push,
     contacts: bearingLimbs(mechanics, support).map((limb): Contact => {
       const arm = posture.arms[limb]
       const leg = posture.legs[limb]

@@ -23,6 +23,11 @@ export interface ExerciseMechanics {
   supports: Support[]
   /** Height of the first support above the second when two bear (a hand on a low bar, a foot on a bench), × stature. */
   rise?: number
+  /**
+   * Which way the first of two supports pushes: upright (the ground, a bench edge, a bar) unless it is `squareToTrunk`, a
+   * wall or sliding back pad that pushes out of the back alone. Then no `rise` applies and there is nothing to balance.
+   */
+  firstPushes?: 'upright' | 'squareToTrunk'
   /** Two to four postures through the repetition, in order. */
   frames: Frame[]
   balance?: Balance

@@ -35,8 +35,8 @@ export const groupCentre = (group: ContactGroup): Vector => mean(group.contacts.
  * Support reactions that hold the given forces, linear in them.
  *
  * One group takes the whole force and, as a couple, the offset of the pressure centre from its contact. Of two groups
- * each takes an upright force so that forces and moments in the sagittal plane balance; sideways pull and
- * what is left of the moments go to the second. No group: the body rests on pads and nothing is solved.
+ * the first takes a force of known direction (upright, or square to the trunk), sized so that moments
+ * in the sagittal plane balance; everything else goes to the second. No group: the body rests on pads and nothing is solved.
  */
 export function reactions(groups: readonly ContactGroup[], applied: readonly Force[]): Force[] {
   const [first, second] = groups
@@ -49,10 +49,9 @@ export function reactions(groups: readonly ContactGroup[], applied: readonly For
   const a = groupCentre(first)
   const b = groupCentre(second)
   const about = wrench(applied, b)
-  // Moment of an upright unit force at a about b, around the lateral axis.
-  const lever = cross(subtract(a, b), [0, 0, 1])[1]
-  const upright: Vector = [0, 0, -about.moment[1] / lever]
-  const onFirst = onGroup(first, upright, ZERO)
+  // Moment of a unit force at a about b, around the lateral axis.
+  const lever = cross(subtract(a, b), first.push)[1]
+  const onFirst = onGroup(first, scale(first.push, -about.moment[1] / lever), ZERO)
   const rest = wrench([...applied, ...onFirst], b)
   return [...onFirst, ...onGroup(second, scale(rest.force, -1), scale(rest.moment, -1))]
 }
