@@ -46,7 +46,7 @@ export async function readCatalogue(seeds = SEEDS): Promise<ExerciseDocument[]> 
 }
 
 /** Stores the rule sets; the newest becomes active only where none was, so that an admin's choice stands. */
-async function seedRuleSets(dataSource: DataSource, ruleSets: RuleSet[], now: Date): Promise<RuleSet> {
+export async function seedRuleSets(dataSource: DataSource, ruleSets: RuleSet[], now: Date): Promise<RuleSet> {
   const newest = ruleSets.at(-1)
   if (newest === undefined) throw new Error('There is no rule set under seeds/rules.')
   return dataSource.transaction(async (manager) => {
