@@ -53,6 +53,8 @@ interface DataTableProps<Row extends RowData> {
   /** Names the row in its open button. */
   rowName?: (row: Row) => string
   sort?: SortingState
+  /** Closer columns, for tables with many of them. */
+  dense?: boolean
 }
 
 /** Sortable table; the first column stays in view when a narrow screen scrolls sideways. */
@@ -64,6 +66,7 @@ export function DataTable<Row extends RowData>({
   detail,
   rowName,
   sort,
+  dense = false,
 }: DataTableProps<Row>) {
   const table = useTable({
     features,
@@ -105,7 +108,8 @@ export function DataTable<Row extends RowData>({
                             : undefined
                     }
                     className={cx(
-                      'bg-wash px-3 align-bottom font-semibold',
+                      'bg-wash align-bottom font-semibold',
+                      dense ? 'px-2 first:pl-3' : 'px-3',
                       look?.hot ? 'text-oxide' : 'text-pencil',
                       look?.align === 'end' ? 'text-right' : 'text-left',
                       index === 0 && 'sticky left-0 z-10',
@@ -150,7 +154,7 @@ export function DataTable<Row extends RowData>({
             const detailId = `detail-${row.id}`
             return (
               <Fragment key={row.id}>
-                <tr className={open ? 'bg-wash/50' : undefined}>
+                <tr className={open ? 'bg-opened' : undefined}>
                   {row.getAllCells().map((cell, index) => {
                     const Cell = index === 0 ? 'th' : 'td'
                     return (
@@ -158,9 +162,10 @@ export function DataTable<Row extends RowData>({
                         key={cell.id}
                         {...(index === 0 ? { scope: 'row' as const } : {})}
                         className={cx(
-                          'border-t border-rule px-3 py-2 text-left align-middle font-normal',
+                          'border-t border-rule py-2 text-left align-middle font-normal',
+                          dense ? 'px-2 first:pl-3' : 'px-3',
                           cell.column.columnDef.meta?.align === 'end' && 'text-right',
-                          index === 0 && 'sticky left-0 z-10 bg-card',
+                          index === 0 && cx('sticky left-0 z-10', open ? 'bg-opened' : 'bg-card'),
                         )}
                       >
                         <table.FlexRender cell={cell} />
@@ -185,7 +190,7 @@ export function DataTable<Row extends RowData>({
                   )}
                 </tr>
                 {open && detail !== undefined && (
-                  <tr id={detailId} className="bg-wash/50">
+                  <tr id={detailId} className="bg-opened">
                     <td colSpan={width} className="px-3 pb-4">
                       {detail(row.original)}
                     </td>
