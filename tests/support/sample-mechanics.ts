@@ -1,7 +1,7 @@
 import type { ExerciseMechanics } from '#shared/mechanics/definition'
 
 /** Plain exercises, authored only as far as drawings and pages need them; the true ones are in seeds/catalogue. */
-const standing = { ankle: [0, -0.475] as [number, number] }
+const standing = { ankle: [0, -0.44] as [number, number] }
 
 const pullUp: ExerciseMechanics = {
   guidance: 'ownBody',
@@ -32,7 +32,8 @@ const straightArmPulldown: ExerciseMechanics = {
     arms: { shoulder, elbow: 10 },
     legs: standing,
   })),
-  loads: [{ at: 'hands', direction: { toward: [0.55, 0.75], of: 'hip' } }],
+  balance: { solve: 'legs' },
+  loads: [{ at: 'hands', direction: { toward: [0.55, 1.2], of: 'ankle' } }],
   referenceLoad: 0.25,
 }
 
@@ -61,7 +62,7 @@ const squat: ExerciseMechanics = {
   armPlane: 'sagittal',
   supports: ['feet'],
   frames: [
-    { name: 'start', trunk: { lean: 8 }, arms: { shoulder: -45, elbow: 125 }, legs: { ankle: [0, -0.47] } },
+    { name: 'start', trunk: { lean: 8 }, arms: { shoulder: -45, elbow: 125 }, legs: { ankle: [0, -0.44] } },
     { name: 'middle', trunk: { lean: 30 }, arms: { shoulder: -45, elbow: 125 }, legs: { ankle: [0.1, -0.38] } },
     { name: 'end', trunk: { lean: 42 }, arms: { shoulder: -45, elbow: 125 }, legs: { ankle: [0.15, -0.26] } },
   ],
@@ -122,21 +123,21 @@ const oneArmRow: ExerciseMechanics = {
   gripWidth: 'shoulder',
   armPlane: 'sagittal',
   supports: ['offHand', 'feet'],
-  rise: 0.27,
+  rise: 0.26,
   frames: [
     {
       name: 'start',
       trunk: { lean: 70 },
       arms: { shoulder: 70, elbow: 0 },
       offArm: { shoulder: 75, elbow: 10 },
-      legs: { ankle: [-0.02, -0.47] },
+      legs: { ankle: [-0.02, -0.44] },
     },
     {
       name: 'end',
       trunk: { lean: 70 },
       arms: { shoulder: -10, elbow: 90 },
       offArm: { shoulder: 75, elbow: 10 },
-      legs: { ankle: [-0.02, -0.47] },
+      legs: { ankle: [-0.02, -0.44] },
     },
   ],
   loads: [{ at: 'hands', direction: 'down' }],
