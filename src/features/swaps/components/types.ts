@@ -1,0 +1,3 @@
+import type { ExerciseDocument } from '#shared/contract/exercise'
+
+export type LoadKind = ExerciseDocument['load']['kind']
