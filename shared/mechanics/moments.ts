@@ -1,7 +1,7 @@
 import { roleOf, SEGMENT_NAMES, type CutName, type LimbIndex, type SegmentRef } from './bodies'
+import { flatBack } from './contacts'
 import type { ExerciseMechanics } from './definition'
 import { cutWrench } from './equilibrium'
-import { WRIST_IN_PLANE } from './limbs'
 import type { Force } from './loads'
 import type { Posture } from './posture'
 import { AXES, type Axis, type Term, type Vector } from './solution'
@@ -56,8 +56,6 @@ function cutsOf(mechanics: ExerciseMechanics, posture: Posture): Cut[] {
     const leg = posture.legs[limb]
     const armAxis = cross(arm.plane.p, arm.plane.q)
     const relaxed = limb === 1 && posture.frame.offArm === undefined
-    const wrist =
-      WRIST_IN_PLANE[relaxed ? 'sagittal' : mechanics.armPlane][mechanics.grip === 'none' ? 'neutral' : mechanics.grip]
     const forearm = unit(subtract(arm.wrist, arm.elbow))
     const flat = (limb === 1 ? (posture.frame.offArm ?? posture.frame.arms) : posture.frame.arms).flat !== undefined
     // Flexing a hand bent back on the ground turns it toward the line of the forearm.
@@ -72,7 +70,7 @@ function cutsOf(mechanics: ExerciseMechanics, posture: Posture): Cut[] {
         read: [
           flat
             ? { axis: 'wristFlexion', direction: flatAxis, kind: 'moment' }
-            : { axis: wrist.axis, direction: scale(armAxis, wrist.sign), kind: 'moment' },
+            : { axis: arm.wristAxis.axis, direction: scale(armAxis, arm.wristAxis.sign), kind: 'moment' },
           { axis: 'handAxial', direction: forearm, kind: 'force' },
         ],
       },
@@ -133,6 +131,7 @@ export function jointTerms(
     const load = cutWrench(sets.load, restsOn, ALL_SEGMENTS, { ...cut, mirrored })
     if (!body || !load) continue
     for (const { axis, direction, kind } of cut.read) {
+      if (kind === 'moment' && cut.name === 'lumbar' && flatBack(mechanics)) continue
       const reports = axis === 'handAxial' || axis === 'lumbarAxial'
       const value = (side: { force: Vector; moment: Vector }) =>
         (reports ? 1 : -1) * dot(kind === 'moment' ? side.moment : side.force, direction)

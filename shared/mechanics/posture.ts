@@ -1,7 +1,9 @@
 import type { Arm, ExerciseMechanics, Frame, Leg } from './definition'
-import { relaxedArm, solveArm, solveLeg, trunkAxes, type SolvedArm, type SolvedLeg, type TrunkAxes } from './limbs'
+import { relaxedArm, solveArm, type SolvedArm } from './arm'
+import { solveLeg, type SolvedLeg } from './leg'
 import type { SegmentTable } from './segments'
 import type { Vector } from './solution'
+import { trunkAxes, type TrunkAxes } from './trunk-axes'
 import { add, scale } from './vector'
 
 /** One posture with every joint placed; the mid-hip point is the origin. The working side is the right one. */
