@@ -30,6 +30,8 @@ export default {
       slate: token('slate'),
       /** Tracks, table heads, the chosen place in the rail. */
       wash: token('wash'),
+      /** An opened row: half way from card to wash. */
+      opened: 'color-mix(in srgb, var(--wash) 50%, var(--card))',
       'brass-wash': token('brass-wash'),
       'oxide-wash': token('oxide-wash'),
       /** Flesh and outline of the figure and the body chart. */

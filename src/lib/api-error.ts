@@ -20,3 +20,7 @@ export class ApiError extends Error {
 
 export const isApiError = (error: unknown, ...codes: ClientErrorCode[]): error is ApiError =>
   error instanceof ApiError && (codes.length === 0 || codes.includes(error.code))
+
+/** The API’s own sentence where there is one. */
+export const messageOf = (error: unknown, otherwise: string): string =>
+  error instanceof ApiError ? error.message : otherwise

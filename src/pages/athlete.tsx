@@ -1,14 +1,17 @@
 import { useQuery } from '@tanstack/react-query'
 import { useParams } from 'react-router-dom'
-import type { Today } from '#shared/contract/session'
+import type { Session, Today } from '#shared/contract/session'
 import { homeFor } from '@/app/navigation'
 import { LinkButton } from '@/components/ui/button'
 import { PageHeader } from '@/components/ui/page-header'
 import { EmptyState, Loaded } from '@/components/ui/states'
+import { ExerciseThumbnail } from '@/features/exercises/components/exercise-figure'
+import { useExercises } from '@/features/exercises/hooks/use-exercises'
 import { todayQuery } from '@/features/sessions/api'
 import { RestDay } from '@/features/sessions/components/rest-day'
 import { SessionSlots } from '@/features/sessions/components/session-slots'
 import { SlotsSkeleton } from '@/features/sessions/components/slots-skeleton'
+import { exerciseIdsOf } from '@/features/sessions/exercise-ids'
 import { ClosedJoints } from '@/features/sore-joints/components/closed-joints'
 import { StandingJoints } from '@/features/sore-joints/components/standing-joints'
 import { isApiError } from '@/lib/api-error'
@@ -46,7 +49,7 @@ export function Component() {
                 {today.session === null ? (
                   <RestDay today={today} whose={today.athlete.name} />
                 ) : (
-                  <SessionSlots session={today.session} units={person.units} loadKind={() => undefined} />
+                  <ReadSession session={today.session} />
                 )}
               </section>
               <section aria-label="Joints">
@@ -60,6 +63,22 @@ export function Component() {
         )}
       </Loaded>
     </>
+  )
+}
+
+function ReadSession({ session }: { session: Session }) {
+  const { units } = usePerson()
+  const exerciseOf = useExercises(exerciseIdsOf(session))
+  return (
+    <SessionSlots
+      session={session}
+      units={units}
+      heading="h3"
+      loadKind={(id) => exerciseOf(id)?.load.kind}
+      figure={(id, affected) => (
+        <ExerciseThumbnail exercise={exerciseOf(id)} marks={affected} className="h-full w-full" />
+      )}
+    />
   )
 }
 

@@ -14,7 +14,7 @@ import { BodyForm } from '@/features/me/components/body-form'
 import { NameForm } from '@/features/me/components/name-form'
 import { UnitsChoice } from '@/features/me/components/units-choice'
 import { PlaceSelect } from '@/features/places/components/place-select'
-import { ApiError } from '@/lib/api-error'
+import { messageOf } from '@/lib/api-error'
 import { hasRole, usePerson } from '@/lib/person'
 import { ROLE_WORDS } from '@/lib/words'
 
@@ -115,8 +115,7 @@ function UsualPlace() {
           { defaultPlaceId: placeId },
           {
             onSuccess: () => toast({ text: 'Your usual place is saved.' }),
-            onError: (error) =>
-              toast({ text: error instanceof ApiError ? error.message : 'The place could not be saved. Try again.' }),
+            onError: (error) => toast({ text: messageOf(error, 'The place could not be saved. Try again.') }),
           },
         )
       }
@@ -135,8 +134,7 @@ function SignOut() {
       onClick={() =>
         mutate(undefined, {
           onSuccess: () => void navigate(paths.signIn(), { replace: true }),
-          onError: (error) =>
-            toast({ text: error instanceof ApiError ? error.message : 'Signing out failed. Try again.' }),
+          onError: (error) => toast({ text: messageOf(error, 'Signing out failed. Try again.') }),
         })
       }
     >

@@ -1,6 +1,7 @@
 import { useNavigate, useSearchParams } from 'react-router-dom'
 import { paths } from '@/app/paths'
 import { PageHeader } from '@/components/ui/page-header'
+import { DemoAccounts } from '@/features/auth/components/demo-accounts'
 import { SignInForm } from '@/features/auth/components/sign-in-form'
 
 /** Only a path of this site; `//elsewhere` would leave it. */
@@ -12,7 +13,9 @@ export function Component() {
   return (
     <>
       <PageHeader title="Sign in" crumb="Train the muscle, spare the joint." />
-      <SignInForm onSignedIn={() => void navigate(safe(search.get('next')), { replace: true })} />
+      <SignInForm onSignedIn={() => void navigate(safe(search.get('next')), { replace: true })}>
+        {(fill) => <DemoAccounts onChoose={fill} />}
+      </SignInForm>
     </>
   )
 }

@@ -1,23 +1,29 @@
 import { useQuery } from '@tanstack/react-query'
 import { useState } from 'react'
+import type { Session } from '#shared/contract/session'
 import { paths } from '@/app/paths'
 import { Button } from '@/components/ui/button'
 import { PageHeader } from '@/components/ui/page-header'
 import { Loaded } from '@/components/ui/states'
 import { useToast } from '@/components/ui/toast'
-import { todayQuery, useUndoSwap } from '@/features/sessions/api'
+import { ExerciseThumbnail } from '@/features/exercises/components/exercise-figure'
+import { useExercises } from '@/features/exercises/hooks/use-exercises'
+import { todayQuery } from '@/features/sessions/api'
 import { RestDay } from '@/features/sessions/components/rest-day'
 import { SessionSlots } from '@/features/sessions/components/session-slots'
 import { SlotsSkeleton } from '@/features/sessions/components/slots-skeleton'
+import { exerciseIdsOf } from '@/features/sessions/exercise-ids'
 import { standingQuery } from '@/features/sore-joints/api'
 import { SoreJointDialog } from '@/features/sore-joints/components/sore-joint-dialog'
 import { SoreSummary } from '@/features/sore-joints/components/sore-summary'
-import { ApiError } from '@/lib/api-error'
+import { useUndoTaken } from '@/features/swaps/api'
+import { messageOf } from '@/lib/api-error'
 import { formatDay } from '@/lib/format'
 import { usePerson } from '@/lib/person'
 import { useToday } from '@/lib/use-today'
 import { capitalise, jointWords } from '@/lib/words'
 
+/** The athlete’s own day. */
 export function Component() {
   const person = usePerson()
   const day = useToday()
@@ -25,47 +31,23 @@ export function Component() {
   const [reporting, setReporting] = useState(false)
   const today = useQuery(todayQuery(person.id, day))
   const standing = useQuery(standingQuery(person.id))
-  const undo = useUndoSwap(person.id, day)
   const session = today.data?.session
   return (
     <div className="max-w-2xl">
       <PageHeader
         title="Today"
-        crumb={
-          <>
-            {formatDay(day)}
-            {session && ` · ${session.title}, ${session.minutes} min`}
-            {session?.placeName && ` · ${session.placeName}`}
-          </>
-        }
+        crumb={[formatDay(day), session && `${session.title}, ${session.minutes} min`].filter(Boolean).join(' · ')}
       />
-      <div className="grid gap-4">
+      <div className="grid grid-cols-1 gap-4">
         {standing.data !== undefined && <SoreSummary reports={standing.data.items} to={paths.joints()} />}
         <Loaded query={today} what="today’s session" skeleton={<SlotsSkeleton />}>
-          {(data) =>
-            data.session === null ? (
-              <RestDay today={data} />
-            ) : (
-              <SessionSlots
-                session={data.session}
-                units={person.units}
-                loadKind={() => undefined}
-                onUndo={(swapId) =>
-                  undo.mutate(swapId, {
-                    onSuccess: (swap) => toast({ text: `${swap.exercise.name} is taken out again.` }),
-                    onError: (error) =>
-                      toast({
-                        text: error instanceof ApiError ? error.message : 'The swap could not be undone. Try again.',
-                      }),
-                  })
-                }
-              />
-            )
-          }
+          {(data) => (data.session === null ? <RestDay today={data} /> : <OwnSession session={data.session} />)}
         </Loaded>
-        <Button wide onClick={() => setReporting(true)} className="min-h-12">
-          A joint is sore
-        </Button>
+        <div className="sticky bottom-21 z-20 md:static">
+          <Button wide onClick={() => setReporting(true)} className="min-h-12 max-md:shadow-lg">
+            A joint is sore
+          </Button>
+        </div>
       </div>
       {reporting && (
         <SoreJointDialog
@@ -79,5 +61,30 @@ export function Component() {
         />
       )}
     </div>
+  )
+}
+
+function OwnSession({ session }: { session: Session }) {
+  const { units, body } = usePerson()
+  const toast = useToast()
+  const undo = useUndoTaken()
+  const exerciseOf = useExercises(exerciseIdsOf(session))
+  return (
+    <SessionSlots
+      session={session}
+      units={units}
+      loadKind={(id) => exerciseOf(id)?.load.kind}
+      figure={(id, affected) => (
+        <ExerciseThumbnail exercise={exerciseOf(id)} sex={body?.sex} marks={affected} className="h-full w-full" />
+      )}
+      undoing={undo.isPending ? undo.variables : undefined}
+      onUndo={(swapId) =>
+        undo.mutate(swapId, {
+          onSuccess: ({ exercise }) =>
+            toast({ text: `${exercise.name} is taken out again; the planned exercise is back.` }),
+          onError: (error) => toast({ text: messageOf(error, 'The swap could not be undone. Try again.') }),
+        })
+      }
+    />
   )
 }

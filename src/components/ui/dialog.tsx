@@ -1,6 +1,6 @@
 import { X } from 'lucide-react'
 import * as Radix from 'radix-ui/dialog'
-import type { ReactNode } from 'react'
+import { useEffect, useRef, type ReactNode } from 'react'
 import { Icon } from './icon'
 
 interface DialogProps {
@@ -9,13 +9,23 @@ interface DialogProps {
   onClose: () => void
   title: string
   description?: ReactNode
+  /** Names the step of a dialog with several; a new one starts at its top, and reading starts there too. */
+  step?: string
   /** Stays in view below the scrolling part. */
   footer?: ReactNode
   children: ReactNode
 }
 
 /** A whole page on phones, a sheet in the middle on wider screens. */
-export function Dialog({ open, onClose, title, description, footer, children }: DialogProps) {
+export function Dialog({ open, onClose, title, description, step, footer, children }: DialogProps) {
+  const page = useRef<HTMLDivElement>(null)
+  const shown = useRef(step)
+  useEffect(() => {
+    if (shown.current === step) return
+    shown.current = step
+    page.current?.scrollTo({ top: 0 })
+    page.current?.focus({ preventScroll: true })
+  }, [step])
   return (
     <Radix.Root open={open} onOpenChange={(next) => !next && onClose()}>
       <Radix.Portal>
@@ -36,7 +46,9 @@ export function Dialog({ open, onClose, title, description, footer, children }: 
               <span className="sr-only">Close</span>
             </Radix.Close>
           </header>
-          <div className="min-h-0 flex-1 overflow-y-auto px-4 py-5 sm:px-6">{children}</div>
+          <div ref={page} tabIndex={-1} className="min-h-0 flex-1 overflow-y-auto px-4 py-5 outline-none sm:px-6">
+            {children}
+          </div>
           {footer !== undefined && (
             <footer className="flex flex-wrap justify-end gap-3 border-t border-rule bg-card px-4 py-3 sm:rounded-b-xl sm:px-6">
               {footer}

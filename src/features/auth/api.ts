@@ -1,5 +1,5 @@
-import { useMutation, useQueryClient } from '@tanstack/react-query'
-import { requestPasswordReset, resetPassword, signIn, signOut } from '#shared/contract/auth'
+import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query'
+import { listDemoAccounts, requestPasswordReset, resetPassword, signIn, signOut } from '#shared/contract/auth'
 import { call, type Input } from '@/lib/api-client'
 
 /** Whoever was signed in before leaves nothing behind in the cache. */
@@ -27,4 +27,11 @@ export const useResetPassword = () =>
   useMutation({
     mutationFn: (body: Input<typeof resetPassword>['body']) => call(resetPassword, { body }),
     meta: { keepsData: true },
+  })
+
+export const demoAccountsQuery = () =>
+  queryOptions({
+    queryKey: ['demoAccounts'],
+    queryFn: ({ signal }) => call(listDemoAccounts, undefined, signal),
+    staleTime: Infinity,
   })

@@ -16,7 +16,10 @@ const COLUMNS = column.columns([
     sortFn: 'text',
     cell: ({ row: { original } }) => (
       <div className="min-w-36">
-        <Link to={paths.athlete(original.id)} className="inline-flex min-h-target items-center font-semibold link">
+        <Link
+          to={paths.athlete(original.id)}
+          className="-my-2.5 inline-flex min-h-target items-center font-semibold link"
+        >
           {original.name}
         </Link>
         <p className="text-pencil">

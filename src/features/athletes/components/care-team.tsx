@@ -6,7 +6,7 @@ import { ConfirmDialog } from '@/components/ui/confirm-dialog'
 import { Loaded, Skeleton } from '@/components/ui/states'
 import { Switch } from '@/components/ui/switch'
 import { useToast } from '@/components/ui/toast'
-import { ApiError } from '@/lib/api-error'
+import { messageOf } from '@/lib/api-error'
 import { formatInstant } from '@/lib/format'
 import { ROLE_WORDS } from '@/lib/words'
 import { careTeamQuery, useSetConsent } from '../api'
@@ -24,8 +24,7 @@ export function CareTeam() {
       { userId: member.userId, letIn },
       {
         onSuccess: () => toast({ text: letIn ? `${member.name} is let in.` : `${member.name} is shut out.` }),
-        onError: (error) =>
-          toast({ text: error instanceof ApiError ? error.message : 'That could not be saved. Try again.' }),
+        onError: (error) => toast({ text: messageOf(error, 'That could not be saved. Try again.') }),
       },
     )
   return (

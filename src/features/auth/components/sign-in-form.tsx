@@ -1,5 +1,5 @@
 import { zodResolver } from '@hookform/resolvers/zod'
-import type { ReactNode } from 'react'
+import { useRef, type ReactNode } from 'react'
 import { useForm, type UseFormReturn } from 'react-hook-form'
 import { Link } from 'react-router-dom'
 import { signIn } from '#shared/contract/auth'
@@ -35,9 +35,10 @@ export function SignInForm({ onSignedIn, children }: SignInFormProps) {
       onError: (cause) => showServerErrors(cause, form.setError, ['email', 'password']),
     }),
   )
-  const fill = (credentials: Credentials) => {
-    form.reset(credentials)
-    form.setFocus('password')
+  const button = useRef<HTMLButtonElement>(null)
+  const fill = ({ email, password }: Credentials) => {
+    form.reset({ email, password })
+    button.current?.focus()
   }
   return (
     <div className="grid items-start gap-8 md:grid-cols-[minmax(18rem,24rem)_1fr]">
@@ -48,7 +49,7 @@ export function SignInForm({ onSignedIn, children }: SignInFormProps) {
       >
         <Inputs form={form} />
         <FormError error={isApiError(error, 'invalid_request') ? null : error} />
-        <Button type="submit" kind="primary" wide busy={isPending} busyLabel="Signing in">
+        <Button ref={button} type="submit" kind="primary" wide busy={isPending} busyLabel="Signing in">
           Sign in
         </Button>
         <Link to={paths.forgotPassword()} className="inline-flex min-h-target items-center justify-self-start link">

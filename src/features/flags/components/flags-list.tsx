@@ -50,7 +50,7 @@ export function FlagsList({ own }: { own: boolean }) {
   const { data } = query
   const rows = useMemo(() => (data === undefined ? [] : itemsOf(data)), [data])
   return (
-    <div className="grid gap-4">
+    <div className="grid grid-cols-1 gap-4">
       <ChoiceGroup legend={<span className="sr-only">Which flags</span>}>
         {(Object.keys(STATES) as FlagState[]).map((choice) => (
           <Chip

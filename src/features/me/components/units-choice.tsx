@@ -1,6 +1,6 @@
 import { Chip, ChoiceGroup } from '@/components/ui/choice-group'
 import { useToast } from '@/components/ui/toast'
-import { ApiError } from '@/lib/api-error'
+import { messageOf } from '@/lib/api-error'
 import { usePerson } from '@/lib/person'
 import type { Units } from '@/lib/units'
 import { useUpdateMe } from '../api'
@@ -29,7 +29,7 @@ export function UnitsChoice() {
                 onSuccess: () => toast({ text: `Numbers are shown in ${LABELS[choice]}.` }),
                 onError: (error) =>
                   toast({
-                    text: error instanceof ApiError ? error.message : 'The units could not be saved. Try again.',
+                    text: messageOf(error, 'The units could not be saved. Try again.'),
                   }),
               },
             )

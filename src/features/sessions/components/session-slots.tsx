@@ -1,16 +1,10 @@
 import type { Session } from '#shared/contract/session'
-import { SlotCard, type LoadKind } from './slot-card'
-import type { ComponentProps } from 'react'
-
-interface SessionSlotsProps extends Omit<ComponentProps<typeof SlotCard>, 'slot'> {
-  session: Session
-}
-export type { LoadKind }
+import { SlotCard, type SlotCardProps } from './slot-card'
 
 /** The slots in the order they are trained. */
-export function SessionSlots({ session, ...rest }: SessionSlotsProps) {
+export function SessionSlots({ session, ...rest }: Omit<SlotCardProps, 'slot'> & { session: Session }) {
   return (
-    <ol aria-label={`Exercises of ${session.title}`} className="grid gap-3">
+    <ol aria-label={`Exercises of ${session.title}`} className="grid grid-cols-1 gap-3">
       {session.slots
         .toSorted((a, b) => a.position - b.position)
         .map((slot) => (

@@ -104,9 +104,9 @@ function Lines({ view }: { view: View }) {
   return (
     <g className="stroke-body-line" fill="none" strokeWidth="1" strokeLinecap="round" opacity="0.7">
       {view === 'front' ? (
-        <path d="M-30 86C-20 88 -10 88 -3 91M30 86C20 88 10 88 3 91M-26 120C-16 128 -6 127 0 122C6 127 16 128 26 120M0 192v3" />
+        <path d="M-32 87C-22 88 -11 88 -3 92M32 87C22 88 11 88 3 92" />
       ) : (
-        <path d="M0 82V160M-24 100C-16 108 -14 122 -18 132M24 100C16 108 14 122 18 132M-22 250C-14 256 -6 254 0 246C6 254 14 256 22 250" />
+        <path d="M0 84V156M-25 100C-17 108 -15 122 -19 133M25 100C17 108 15 122 19 133" />
       )}
     </g>
   )

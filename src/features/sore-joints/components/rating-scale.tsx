@@ -22,15 +22,15 @@ export function RatingScale({
           <label
             key={step}
             className={cx(
-              '-ml-px flex min-h-12 flex-1 items-center justify-center border border-edge bg-card first:ml-0 first:rounded-l-md last:rounded-r-md hover:bg-wash',
-              'has-checked:relative has-checked:z-1 has-checked:border-oxide has-checked:bg-oxide has-checked:font-bold has-checked:text-paper',
-              'has-focus-visible:relative has-focus-visible:z-2 has-focus-visible:outline-3 has-focus-visible:outline-offset-2 has-focus-visible:outline-slate',
+              'relative -ml-px flex min-h-12 flex-1 items-center justify-center border border-edge bg-card first:ml-0 first:rounded-l-md last:rounded-r-md hover:bg-wash',
+              'has-checked:z-1 has-checked:border-oxide has-checked:bg-oxide has-checked:font-bold has-checked:text-paper',
+              'has-focus-visible:z-2 has-focus-visible:outline-3 has-focus-visible:outline-offset-2 has-focus-visible:outline-slate',
             )}
           >
             <input
               type="radio"
               name="rating"
-              className="sr-only"
+              className="absolute inset-0 cursor-pointer appearance-none focus-visible:outline-none"
               checked={value === step}
               onChange={() => onChange(step)}
             />

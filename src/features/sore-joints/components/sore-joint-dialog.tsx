@@ -73,6 +73,7 @@ export function SoreJointDialog({ athleteId, day, onClose, onReported }: SoreJoi
       <Dialog
         open
         onClose={close}
+        step={step}
         title="A joint is sore"
         description={
           { questions: 'First, six questions', details: 'Where, and how it feels', advice: 'The report is saved' }[step]

@@ -15,7 +15,7 @@ export function SoreSummary({ reports, to }: { reports: SoreJoint[]; to?: string
       ))}
       {to !== undefined && (
         <li>
-          <Link to={to} className="link">
+          <Link to={to} className="-my-2.5 inline-flex min-h-target items-center link">
             {reports.length === 1 ? 'this report' : 'these reports'}
           </Link>
         </li>

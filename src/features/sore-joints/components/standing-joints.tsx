@@ -4,7 +4,7 @@ import type { SoreJoint } from '#shared/contract/sore-joint'
 import { Button } from '@/components/ui/button'
 import { EmptyState, Loaded } from '@/components/ui/states'
 import { useToast } from '@/components/ui/toast'
-import { ApiError } from '@/lib/api-error'
+import { messageOf } from '@/lib/api-error'
 import { capitalise, jointWords } from '@/lib/words'
 import { standingQuery, useCloseSoreJoint } from '../api'
 import { ClearanceDialog } from './clearance-dialog'
@@ -27,8 +27,7 @@ export function StandingJoints({ athleteId, own, empty }: StandingJointsProps) {
   const close = (report: SoreJoint) =>
     closure.mutate(report.id, {
       onSuccess: () => toast({ text: `${capitalise(jointWords(report.joint, report.side))} closed.` }),
-      onError: (error) =>
-        toast({ text: error instanceof ApiError ? error.message : 'The report could not be closed. Try again.' }),
+      onError: (error) => toast({ text: messageOf(error, 'The report could not be closed. Try again.') }),
     })
   return (
     <>
@@ -48,7 +47,11 @@ export function StandingJoints({ athleteId, own, empty }: StandingJointsProps) {
                     )}
                     {(report.can.close || report.can.clear) && (
                       <div className="mt-3 flex flex-wrap gap-3">
-                        {report.can.close && <Button onClick={() => close(report)}>It no longer troubles me</Button>}
+                        {report.can.close && (
+                          <Button onClick={() => close(report)}>
+                            {own ? 'It no longer troubles me' : 'Close the report'}
+                          </Button>
+                        )}
                         {report.can.clear && <Button onClick={() => setClearing(report)}>Clear the red flag</Button>}
                       </div>
                     )}
