@@ -68,7 +68,7 @@ export const ruleSet = z.strictObject({
     ),
     /** Share of isometric strength left to a joint that moves, in full from an excursion (degrees) on. */
     moving: cited(z.strictObject({ share, fullAt: positive })),
-    /** Arm (m) over the wrist of the finger muscles that grip, which stiffen a wrist that holds something. */
+    /** Arm (m) over the wrist of the finger muscles, which stiffen a wrist that holds or presses something. */
     grippingWristArm: cited(share),
     /** How a moment and a force grow with body mass: strength × (mass ÷ norm mass)^exponent. */
     momentExponent: cited(positive),
@@ -83,6 +83,8 @@ export const ruleSet = z.strictObject({
     roles: every(ACTIONS, cited(z.partialRecord(z.enum(MUSCLES), share))),
     /** How the grip turns roles in elbow flexion: factor on the role. */
     gripRoles: cited(every(GRIPS, z.partialRecord(z.enum(MUSCLES), z.number().min(0).max(5)))),
+    /** Share of its demand by which a limb joint held still trains its muscles, and the excursion that trains in full. */
+    held: cited(z.strictObject({ share, fullAt: positive })),
     /** Muscles driven less than this share of the limiter are not listed. */
     leastListed: cited(share),
   }),

@@ -45,7 +45,7 @@ export function contextOf(request: RankRequest, ruleSet: RuleSet): RankContext {
   const strength = strengths(athlete, ruleSet)
   const original = planned(prepare(request.original, athlete, ruleSet, strength), request.planned, ruleSet)
   const limit = original.limiter?.demand ?? 0
-  const drive = groupDrive(original.demands, request.target, request.original.document.mechanics.grip, ruleSet)
+  const drive = groupDrive(original.work, request.target, request.original.document.mechanics.grip, ruleSet)
   const flagged = sore.filter((report) => isRedFlagged(report, ruleSet))
   const standing = sore.filter((report) => !isRedFlagged(report, ruleSet))
   const across = targetJoints(request, ruleSet)

@@ -1,7 +1,7 @@
 import type { RuleSet } from '../contract/rule-set'
 import { AXES, type Axis, type PoseAngles, type Role, type Term } from '../mechanics/solution'
-import { ACTION_JOINT, FORCE_ACTIONS, type Action } from '../mechanics/vocabulary'
-import { motionOf, movingStrength, type Motion } from './motion'
+import { ACTION_JOINT, FORCE_ACTIONS, JOINTS, type Action } from '../mechanics/vocabulary'
+import { heldShare, motionOf, movingStrength, type Motion } from './motion'
 import { interpolate } from './numbers'
 import { strengths } from './strength'
 import type { Athlete, Movement } from './types'
@@ -11,6 +11,19 @@ export const GRAVITY = 9.80665
 
 const FORCE_AXES: readonly Axis[] = ['grip', 'scapulaSagittal', 'scapulaVertical', 'handAxial', 'lumbarAxial']
 const WRIST_AXES: readonly Axis[] = ['wristFlexion', 'wristDeviation']
+
+/** Axes whose muscles mostly hold by nature: the trunk's, the neck's, the shoulder girdle's and the grip. */
+const HELD_BY_NATURE: readonly Axis[] = [
+  'grip',
+  'scapulaSagittal',
+  'scapulaVertical',
+  'neck',
+  'trunkFlexion',
+  'trunkLateral',
+  'trunkRotation',
+]
+/** An exercise in which no joint moves this far is a hold, degrees. */
+const HOLD_UNDER = 10
 
 /**
  * One muscle answer of one frame in the athlete's own numbers: value = alpha + beta·L, N·m or N, L in kg.
@@ -27,6 +40,8 @@ export interface Effort {
   /** Strength of either action here; Infinity where the axis serves none. */
   strengthPositive: number
   strengthNegative: number
+  /** How much of its demand counts as training the muscles: less for a limb joint held still while others move. */
+  trains: number
 }
 
 /** Factor on the best strength of an action at the posture's angle; 1 unless a published curve is in the rule set. */
@@ -48,22 +63,24 @@ export function effortsOf(
 ): Effort[] {
   const rules = ruleSet.strength
   const body = athlete.bodyMass * GRAVITY
-  const { grip, gripFree } = movement.mechanics
-  const gripping = grip !== 'none' && !gripFree
+  const fingers = movement.mechanics.gripFree ? 0 : rules.grippingWristArm.value * strength.grip
   const here = (action: Action | null, term: Term, angles: PoseAngles) => {
     if (action === null) return Number.POSITIVE_INFINITY
-    // A fist stiffens the wrist: the finger muscles that hold the load cross it.
-    const fist = gripping && WRIST_AXES.includes(term.axis) ? strength.grip * rules.grippingWristArm.value : 0
+    // The finger muscles that hold a load or press on the ground cross the wrist and stiffen it.
+    const fist = WRIST_AXES.includes(term.axis) ? fingers : 0
     const moved =
       FORCE_ACTIONS.includes(action) || rules.norms[action].moving ? 0 : motion[term.role][ACTION_JOINT[action]]
     const angled = term.role === 'idle' ? 1 : angleFactor(action, angles, ruleSet)
     return (strength[action] + fist) * movingStrength(moved, ruleSet) * angled
   }
+  // In a hold nothing moves, and holding is the training.
+  const hold = JOINTS.every((joint) => motion.working[joint] < HOLD_UNDER)
   const efforts: Effort[] = []
   movement.solution.frames.forEach((frame, index) => {
     for (const term of frame.terms) {
       const arm = FORCE_AXES.includes(term.axis) ? 1 : athlete.stature
       const [positive, negative] = AXES[term.axis]
+      const joint = positive === null ? null : ACTION_JOINT[positive]
       efforts.push({
         frame: index,
         axis: term.axis,
@@ -74,13 +91,15 @@ export function effortsOf(
         negative,
         strengthPositive: here(positive, term, frame.angles),
         strengthNegative: here(negative, term, frame.angles),
+        trains:
+          hold || joint === null || HELD_BY_NATURE.includes(term.axis)
+            ? 1
+            : heldShare(motion[term.role][joint], ruleSet),
       })
     }
   })
   return efforts
 }
-
-export const isForce = (action: Action): boolean => FORCE_ACTIONS.includes(action)
 
 /** Share of strength an effort takes at a load, with the action that answers; null for axes that no muscle answers. */
 export function demandOf(effort: Effort, load: number): { action: Action; demand: number } | null {
@@ -98,6 +117,17 @@ export function demandsAt(efforts: readonly Effort[], load: number): Map<Action,
     if (answer && answer.demand > (demands.get(answer.action) ?? 0)) demands.set(answer.action, answer.demand)
   }
   return demands
+}
+
+/** The largest demand of each action that counts as training, over all frames and roles: what drives muscles. */
+export function workAt(efforts: readonly Effort[], load: number): Map<Action, number> {
+  const work = new Map<Action, number>()
+  for (const effort of efforts) {
+    const answer = demandOf(effort, load)
+    const value = answer ? answer.demand * effort.trains : 0
+    if (answer && value > (work.get(answer.action) ?? 0)) work.set(answer.action, value)
+  }
+  return work
 }
 
 /** The action nearest its strength at a load; null when nothing works. The first of equals in order of frames. */

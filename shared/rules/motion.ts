@@ -73,3 +73,9 @@ export function movingStrength(degrees: number, ruleSet: RuleSet): number {
   const { share, fullAt } = ruleSet.strength.moving.value
   return 1 - (1 - share) * clamp(degrees / fullAt, 0, 1)
 }
+
+/** How much of a limb joint's demand counts as training its muscles, from how far it moves. */
+export function heldShare(degrees: number, ruleSet: RuleSet): number {
+  const { share, fullAt } = ruleSet.muscles.held.value
+  return share + (1 - share) * clamp(degrees / fullAt, 0, 1)
+}

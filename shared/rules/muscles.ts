@@ -1,7 +1,7 @@
 import type { RuleSet } from '../contract/rule-set'
 import { ACTIONS, type Action, type Grip } from '../mechanics/vocabulary'
 import { averageAdult } from './average-adult'
-import { demandsAt, effortsOf } from './efforts'
+import { effortsOf, limiterAt, workAt } from './efforts'
 import { loadRange, strengthBounds } from './load-range'
 import { MUSCLES, TARGET_GROUPS, type Muscle, type TargetGroup } from './muscle-names'
 import type { Movement } from './types'
@@ -22,15 +22,15 @@ export function groupRoleIn(action: Action, group: TargetGroup, grip: Grip, rule
   return most
 }
 
-/** How hard a group's hardest-driven muscle works: the largest role × demand. */
+/** How hard a group's hardest-driven muscle works: the largest role × demand, of demands that train. */
 export function groupDrive(
-  demands: ReadonlyMap<Action, number>,
+  work: ReadonlyMap<Action, number>,
   group: TargetGroup,
   grip: Grip,
   ruleSet: RuleSet,
 ): number {
   let most = 0
-  for (const [action, demand] of demands) {
+  for (const [action, demand] of work) {
     const drive = groupRoleIn(action, group, grip, ruleSet) * demand
     if (drive > most) most = drive
   }
@@ -39,14 +39,14 @@ export function groupDrive(
 
 /** drive(muscle) = max over actions of role × demand, hardest first, equal ones in the order of their names' list. */
 export function muscleDrives(
-  demands: ReadonlyMap<Action, number>,
+  work: ReadonlyMap<Action, number>,
   grip: Grip,
   ruleSet: RuleSet,
 ): Array<{ muscle: Muscle; drive: number }> {
   return MUSCLES.map((muscle) => {
     let drive = 0
     for (const action of ACTIONS) {
-      const value = roleIn(action, muscle, grip, ruleSet) * (demands.get(action) ?? 0)
+      const value = roleIn(action, muscle, grip, ruleSet) * (work.get(action) ?? 0)
       if (value > drive) drive = value
     }
     return { muscle, drive }
@@ -63,11 +63,10 @@ export function musclesOf(
 ): Array<{ muscle: Muscle; drive: number }> {
   const efforts = effortsOf(movement, averageAdult('unspecified', ruleSet), ruleSet)
   const range = loadRange(strengthBounds(efforts, 1))
-  const demands = demandsAt(efforts, Number.isFinite(range.most) ? range.most : 0)
-  let limit = 0
-  for (const demand of demands.values()) if (demand > limit) limit = demand
+  const load = Number.isFinite(range.most) ? range.most : 0
+  const limit = limiterAt(efforts, load)?.demand ?? 0
   if (limit === 0) return []
-  return muscleDrives(demands, movement.mechanics.grip, ruleSet)
+  return muscleDrives(workAt(efforts, load), movement.mechanics.grip, ruleSet)
     .map(({ muscle, drive }) => ({ muscle, drive: drive / limit }))
     .filter(({ drive }) => drive >= ruleSet.muscles.leastListed.value)
 }

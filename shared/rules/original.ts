@@ -1,7 +1,7 @@
 import type { RuleSet } from '../contract/rule-set'
 import type { Dose } from '../contract/session'
 import { inRepetitions, intensity } from './dose'
-import { demandsAt, effortsOf, limiterAt, type Effort } from './efforts'
+import { demandsAt, effortsOf, limiterAt, workAt, type Effort } from './efforts'
 import { loadRange, strengthBounds } from './load-range'
 import { motionOf } from './motion'
 import { strengths } from './strength'
@@ -34,6 +34,8 @@ export interface Planned extends Prepared {
   /** kg as mechanics reads it. */
   load: number
   demands: ReadonlyMap<Action, number>
+  /** Demands as far as they train muscles. */
+  work: ReadonlyMap<Action, number>
   limiter: { action: Action; demand: number } | null
   /** Share of the 1RM that the planned repetitions and reserve stand for. */
   intensity: number
@@ -62,6 +64,7 @@ export function planned(prepared: Prepared, dose: Dose, ruleSet: RuleSet): Plann
     ...prepared,
     load,
     demands: demandsAt(efforts, load),
+    work: workAt(efforts, load),
     limiter: limiterAt(efforts, load),
     intensity: share,
     repetitions,

@@ -1,7 +1,7 @@
 import type { Preview } from '../contract/exercise'
 import type { RuleSet } from '../contract/rule-set'
 import { JOINTS, type Action } from '../mechanics/vocabulary'
-import { demandOf, demandsAt, effortsOf, limiterAt } from './efforts'
+import { demandOf, effortsOf, limiterAt, workAt } from './efforts'
 import { asJointStress, tightestBySide } from './joint-stress'
 import { loadRange, strengthBounds } from './load-range'
 import { muscleDrives } from './muscles'
@@ -24,7 +24,6 @@ export function previewOf(
   const range = loadRange(strengthBounds(efforts, 1))
   const grows = Number.isFinite(range.most)
   const possible = range.least <= range.most
-  const demands = demandsAt(efforts, load)
   const limiter = grows && possible && range.mostBy ? range.mostBy.action : limiterAt(efforts, load)?.action
   return {
     frames: movement.solution.frames.map((frame, index) => {
@@ -48,7 +47,7 @@ export function previewOf(
     }),
     oneRepMax: grows && possible ? range.most : null,
     limiter: limiter ?? null,
-    muscles: muscleDrives(demands, movement.mechanics.grip, ruleSet).filter(
+    muscles: muscleDrives(workAt(efforts, load), movement.mechanics.grip, ruleSet).filter(
       ({ drive }) => drive >= ruleSet.muscles.leastListed.value,
     ),
     coordination: movement.coordination,

@@ -3,7 +3,6 @@ import type { LeftOutRow, SwapRow } from '../contract/swap'
 import { capOfRating } from './caps'
 import { contextOf, type RankContext } from './context'
 import { asJointStress } from './joint-stress'
-import { groupDrive } from './muscles'
 import { rate, redFlagReason, shownJoints } from './rate'
 import type { Candidate, RankRequest, RankResult } from './types'
 
@@ -18,8 +17,8 @@ export const bestFirst = (one: Unranked, other: Unranked): number =>
 
 /** The original as planned, with the stresses and caps it meets; null when it is beyond current strength. */
 function originalRow(context: RankContext): RankResult['originalRow'] {
-  const { original, request, ruleSet } = context
-  const { candidate, limiter, demands, load } = original
+  const { original, request } = context
+  const { candidate, limiter, load } = original
   const { document } = candidate
   if (limiter === null || limiter.demand > 1) return null
   return {
@@ -31,7 +30,7 @@ function originalRow(context: RankContext): RankResult['originalRow'] {
       guidance: document.mechanics.guidance,
       supports: [...document.mechanics.supports],
     },
-    targetDrive: groupDrive(demands, request.target, document.mechanics.grip, ruleSet) / limiter.demand,
+    targetDrive: context.originalDrive,
     limiter: limiter.action,
     joints: shownJoints(original, context, load).map(asJointStress),
     coordination: candidate.coordination,

@@ -1,10 +1,10 @@
 import type { Dose } from '../contract/session'
 import type { LeftOutRow, SwapRow } from '../contract/swap'
 import { SKILL_GRADES } from '../contract/exercise'
-import { JOINTS, type Action, type Joint } from '../mechanics/vocabulary'
+import { JOINTS, type Joint } from '../mechanics/vocabulary'
 import type { RankContext } from './context'
 import { inUnit, intensity, setAt } from './dose'
-import { demandsAt, limiterAt } from './efforts'
+import { demandsAt, limiterAt, workAt } from './efforts'
 import { asJointStress, capRange, isOver, tightestBySide, type Tightest } from './joint-stress'
 import { loadRange, strengthBounds } from './load-range'
 import { groupDrive } from './muscles'
@@ -82,7 +82,7 @@ export function rate(candidate: Candidate, context: RankContext): Rated {
   const grip = document.mechanics.grip
   const prepared = prepare(candidate, athlete, ruleSet, context.strength)
   const { efforts, strains } = prepared
-  const drive = (demands: ReadonlyMap<Action, number>) => groupDrive(demands, target, grip, ruleSet)
+  const drive = (at: number) => groupDrive(workAt(efforts, at), target, grip, ruleSet)
   const { name, plural } = TARGET_NAMES[target]
 
   const equipment = equipmentAt(document, place)
@@ -94,7 +94,7 @@ export function rate(candidate: Candidate, context: RankContext): Rated {
     Math.min(possible ? healthy.most : Number.NEGATIVE_INFINITY, settings?.heaviest ?? 0),
   )
   const healthyLimiter = limiterAt(efforts, healthyLoad)
-  const healthyDrive = healthyLimiter ? drive(demandsAt(efforts, healthyLoad)) / healthyLimiter.demand : 0
+  const healthyDrive = healthyLimiter ? drive(healthyLoad) / healthyLimiter.demand : 0
   const notTrained = (share: number) =>
     leave(
       candidate,
@@ -147,7 +147,7 @@ export function rate(candidate: Candidate, context: RankContext): Rated {
   }
 
   const demands = demandsAt(efforts, load)
-  const targetDrive = drive(demands) / limiter.demand
+  const targetDrive = drive(load) / limiter.demand
   if (targetDrive < ruleSet.score.leastTargetDrive.value) return notTrained(targetDrive)
   const repetitions = inUnit(set.repetitions, document.unit, ruleSet)
   const factors = factorsOf(
