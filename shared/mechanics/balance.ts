@@ -1,5 +1,5 @@
 import { segmentBodies } from './bodies'
-import { contactGroups, UPRIGHT, type ContactGroup } from './contacts'
+import { contactGroups, flatBack, UPRIGHT, type ContactGroup } from './contacts'
 import type { Arm, Balance, ExerciseMechanics, Frame, Leg } from './definition'
 import { atReference, groupCentre, pressureOffset, reactions } from './equilibrium'
 import { MechanicsError } from './errors'
@@ -71,7 +71,7 @@ function loaded(mechanics: ExerciseMechanics, frame: Frame, table: SegmentTable,
 function imbalance(mechanics: ExerciseMechanics, { groups, body, load }: LoadedPosture): number {
   const [first, second] = groups
   if (!first) return 0
-  if (second && mechanics.firstPushes === 'squareToTrunk') return 0
+  if (second && flatBack(mechanics)) return 0
   if (second) return groupCentre(first)[2] - groupCentre(second)[2] - (mechanics.rise ?? 0)
   return pressureOffset(atReference(mechanics, body, load), groupCentre(first))
 }
@@ -89,7 +89,7 @@ export function solveBalance(
   const { balance } = mechanics
   const at = (by: number) => loaded(mechanics, balance ? withBalance(frame, balance.solve, by) : frame, table, path)
   const authored = at(0)
-  if (balance && mechanics.firstPushes === 'squareToTrunk') {
+  if (balance && flatBack(mechanics)) {
     throw new MechanicsError(
       'unsupported_combination',
       'balance',

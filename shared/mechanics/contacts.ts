@@ -54,6 +54,8 @@ const STEEP = 25
 const FOREARM_BEARING = 0.2
 /** Where along the upper trunk a bench edge bears, from L5/S1 (the lower shoulder blade; our estimate). */
 const UPPER_BACK_BEARING = 0.75
+/** Middle of a back flat on a wall or pad, from L5/S1 as a share of the upper trunk: half way from hip to shoulder (derived). */
+const FLAT_BACK_BEARING = 0.375
 
 /** Where a foot bears, given how its sole lies. */
 function footContact(leg: SolvedLeg, footPoint: number | undefined): Vector {
@@ -61,6 +63,9 @@ function footContact(leg: SolvedLeg, footPoint: number | undefined): Vector {
   if (leg.soleAngle < -STEEP) return leg.heel
   return between(leg.heel, leg.toe, footPoint ?? MID_FOOT)
 }
+
+/** Whether the whole back lies on a wall or sliding pad. */
+export const flatBack = (mechanics: ExerciseMechanics): boolean => mechanics.firstPushes === 'squareToTrunk'
 
 /** The way the ground pushes. */
 export const UPRIGHT: Vector = [0, 0, 1]
@@ -120,7 +125,7 @@ export function contactGroups(mechanics: ExerciseMechanics, posture: Posture): C
       'Statics can share weight between two supports at most.',
     )
   }
-  const push = mechanics.firstPushes === 'squareToTrunk' ? posture.trunkAxes.forward : UPRIGHT
+  const push = flatBack(mechanics) ? posture.trunkAxes.forward : UPRIGHT
   return mechanics.supports.map((support) => ({
     support,
     push,
@@ -135,7 +140,11 @@ export function contactGroups(mechanics: ExerciseMechanics, posture: Posture): C
         feet: footContact(leg, mechanics.balance?.footPoint),
         offFoot: footContact(leg, mechanics.balance?.footPoint),
         knees: leg.knee,
-        upperBack: between(posture.lumbar, posture.neckBase, UPPER_BACK_BEARING),
+        upperBack: between(
+          posture.lumbar,
+          posture.neckBase,
+          flatBack(mechanics) ? FLAT_BACK_BEARING : UPPER_BACK_BEARING,
+        ),
       }[support as keyof typeof BEARING_SEGMENT]
       const name = BEARING_SEGMENT[support as keyof typeof BEARING_SEGMENT]
       return { support, at: point, segment: name === 'upperTrunk' ? { name } : { name, limb } }

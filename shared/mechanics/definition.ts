@@ -25,7 +25,8 @@ export interface ExerciseMechanics {
   rise?: number
   /**
    * Which way the first of two supports pushes: upright (the ground, a bench edge, a bar) unless it is `squareToTrunk`, a
-   * wall or sliding back pad that pushes out of the back alone. Then no `rise` applies and there is nothing to balance.
+   * wall or sliding back pad that pushes out of the middle of the back alone. Then no `rise` applies and there is nothing
+   * to balance, and the back, flat on its pad from pelvis to shoulders, asks nothing of the trunk muscles.
    */
   firstPushes?: 'upright' | 'squareToTrunk'
   /** Two to four postures through the repetition, in order. */

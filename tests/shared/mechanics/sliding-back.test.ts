@@ -33,13 +33,20 @@ describe('a back that bears on a wall or a sliding pad', () => {
   it('asks of each knee the couple of ground and wall, by hand for a load on the hips', () => {
     const table = SEGMENTS.male
     const knee = solveExercise(wallSit, 'male').frames[0]!.terms.find(({ axis }) => axis === 'knee')!
-    const wallHeight = table.pelvis.length + 0.75 * table.upperTrunk.length
+    const wallHeight = table.pelvis.length + 0.375 * table.upperTrunk.length
     const middleOfFoot = (0.45 - 0.25) * table.foot.length
     const drop = table.shank.length + table.ankleHeight
     // Ground pushes up under mid-foot; the wall's push, which the feet must return, is sized by moments about mid-foot.
     const wall = (table.thigh.length + middleOfFoot) / (wallHeight + drop)
     expect(knee.b).toBeCloseTo(0.5 * (middleOfFoot - wall * drop), 10)
     expect(knee.b).toBeLessThan(0)
+  })
+
+  it('asks nothing of the trunk, and still lets a load on the shoulders press the spine', () => {
+    const loaded = { ...wallSit, loads: [{ at: 'shoulders' as const, direction: 'down' as const }] }
+    const { terms } = solveExercise(loaded, 'male').frames[0]!
+    expect(terms.filter(({ axis }) => axis.startsWith('trunk'))).toEqual([])
+    expect(terms.find(({ axis }) => axis === 'lumbarAxial')!.b).toBeCloseTo(-1, 12)
   })
 
   it('refuses a balance, since the wall holds any lean', () => {
