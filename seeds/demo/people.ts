@@ -1,3 +1,4 @@
+import type { DemoAccount } from '#shared/contract/auth'
 import type { ExerciseDocument } from '#shared/contract/exercise'
 import type { Role } from '#shared/contract/me'
 import type { Sex } from '#shared/mechanics/sex'
@@ -208,14 +209,6 @@ export const ATHLETES: DemoAthlete[] = [
     consents: false,
   }),
 ]
-
-export interface DemoAccount {
-  name: string
-  email: string
-  password: string
-  role: Role
-  clubName: string
-}
 
 /** What the start command prints and the sign-in page shows: every role in both clubs. All athletes share a password. */
 export const DEMO_ACCOUNTS: DemoAccount[] = [ILSE, OSWIN, YARD_COACH, ROOM_COACH, PHYSIO, ADMIN].flatMap(

@@ -25,11 +25,7 @@ export async function raise(
     const subject = await findFlagSubject(manager, body.slotId, body.exerciseId)
     if (owner === null || subject === null) throw notFound('That slot')
     if (!subject.published) throw notFound('That exercise')
-    if (subject.originalId === body.exerciseId || subject.ruleSetVersion === null) {
-      throw new AppError('not_a_swap', 'This is the planned exercise itself.', [
-        { path: 'exerciseId', message: 'Name the exercise that was offered instead.' },
-      ])
-    }
+    if (subject.ruleSetVersion === null) throw new AppError('unavailable', 'No rule set is active yet. Try again soon.')
     const id = randomUUID()
     await manager.query(
       `insert into flags (id, club_id, raised_by, slot_id, original_id, exercise_id, reason, note, rule_set_version,
