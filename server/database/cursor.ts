@@ -1,5 +1,6 @@
 import type { z } from 'zod'
 import { AppError } from '../errors'
+import { findUnstorable } from '../middleware/validate'
 
 /** The sort values of the cursor, or null without one. Throws `invalid_request` for one that this list did not hand out. */
 export function decodeCursor<Key extends Array<string | number>>(
@@ -9,7 +10,8 @@ export function decodeCursor<Key extends Array<string | number>>(
   if (cursor === undefined) return null
   try {
     const parsed = key.safeParse(JSON.parse(Buffer.from(cursor, 'base64url').toString('utf8')))
-    if (parsed.success) return parsed.data
+    // Text in a cursor reaches a query like any other text that was sent.
+    if (parsed.success && findUnstorable(parsed.data) === null) return parsed.data
   } catch {
     // Falls through to the one answer for every broken cursor.
   }

@@ -7,9 +7,11 @@ export const slug = z
   .string()
   .max(80)
   .regex(/^[a-z0-9]+(-[a-z0-9]+)*$/, 'Use lower-case letters, digits and single hyphens.')
+/** Years that calendars and databases agree on; nobody who trains was born before them. */
+const inOurTime = (text: string) => text >= '1900' && text < '2200'
 /** Calendar day in the athlete's own time zone, YYYY-MM-DD. */
-export const day = z.iso.date()
-export const instant = z.iso.datetime()
+export const day = z.iso.date().refine(inOurTime, 'Give a day between 1900 and 2199.')
+export const instant = z.iso.datetime().refine(inOurTime, 'Give a time between 1900 and 2199.')
 export const email = z.email().max(LIMITS.email.max)
 export const password = z
   .string()
@@ -30,7 +32,8 @@ export const errorBody = z.object({
 export type ErrorBody = z.infer<typeof errorBody>
 
 /** The one list shape of the API. */
-export const list = <T extends z.ZodType>(item: T) => z.object({ items: z.array(item), nextCursor: z.string().nullable() })
+export const list = <T extends z.ZodType>(item: T) =>
+  z.object({ items: z.array(item), nextCursor: z.string().nullable() })
 
 export const pageQuery = z.object({
   cursor: z.string().max(200).optional(),

@@ -13,7 +13,7 @@ import { findStandingOf } from '../sore-joints/repository'
 import { presentAthleteRow } from './present'
 import { findAthletes } from './repository'
 
-const cursorKey = z.tuple([z.int(), z.int(), z.string(), z.uuid()])
+const cursorKey = z.tuple([z.int().min(0).max(1), z.int().min(0).max(11), z.string(), z.uuid()])
 
 /** The whole page in a fixed number of queries, however many athletes are on it. */
 export async function list(

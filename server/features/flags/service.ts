@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto'
 import { z } from 'zod'
+import { id, instant } from '#shared/contract/common'
 import type { Received, ResponseOf } from '#shared/contract/endpoint'
 import type { Flag, listFlags, raiseFlag } from '#shared/contract/flag'
 import { decodeCursor, toPage } from '../../database/cursor'
@@ -12,7 +13,7 @@ import { findSlotOwner } from '../swaps/repository'
 import { presentFlag } from './present'
 import { findFlag, findFlags, findFlagSubject } from './repository'
 
-const cursorKey = z.tuple([z.iso.datetime(), z.uuid()])
+const cursorKey = z.tuple([instant, id])
 
 /** Whoever may see the slot may object: the athlete, and their coach and physio. */
 export async function raise(

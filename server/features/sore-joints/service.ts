@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto'
 import { z } from 'zod'
+import { id, instant } from '#shared/contract/common'
 import type { Received, ResponseOf } from '#shared/contract/endpoint'
 import {
   RED_FLAGS,
@@ -23,7 +24,7 @@ import { findSoreJoint, findSoreJoints, findStanding } from './repository'
 /** From a rating of 8 on, pain is a red flag whatever the other answers were. */
 const SEVERE_RATING = 8
 const DAY = 24 * 60 * 60 * 1000
-const cursorKey = z.tuple([z.iso.datetime(), z.uuid()])
+const cursorKey = z.tuple([instant, id])
 
 function raisedFlags(report: SoreJointReport) {
   return RED_FLAGS.filter((flag) => report.redFlags[flag] || (flag === 'severePain' && report.rating >= SEVERE_RATING))
