@@ -25,7 +25,7 @@ const CHROMIUM_FLAGS = [
   '--disable-sync',
 ]
 
-function readCatalogue(filter: string): ExerciseDocument[] {
+export function readCatalogue(filter: string): ExerciseDocument[] {
   return readdirSync(CATALOGUE)
     .filter((file) => file.endsWith('.yaml'))
     .sort()

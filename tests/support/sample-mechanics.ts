@@ -33,7 +33,7 @@ const straightArmPulldown: ExerciseMechanics = {
     legs: standing,
   })),
   balance: { solve: 'legs' },
-  loads: [{ at: 'hands', direction: { toward: [0.55, 1.2], of: 'ankle' } }],
+  loads: [{ at: 'hands', direction: { toward: [0.55, 1.05], of: 'ankle' } }],
   referenceLoad: 0.25,
 }
 

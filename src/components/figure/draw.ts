@@ -5,7 +5,7 @@ import { bodyShapes } from './body'
 import { bearingHandShapes } from './equipment/hands'
 import { loadShapes } from './equipment/loads'
 import { bearingHands, bearsOn, handsLieFlat } from './equipment/places'
-import { bearings, padShapes, standOn, upperBackContact } from './equipment/supports'
+import { bearings, padShapes, standOn, upperBackContact, upperBackOn, wall } from './equipment/supports'
 import { boxOf, round, subtract, union, type Box } from './geometry'
 import type { Shape } from './scene'
 import { block } from './solids'
@@ -25,6 +25,8 @@ export interface Drawing {
 
 /** Room around everything for strokes, discs and rings. */
 const MARGIN = 4
+/** How far above the athlete's highest point a cable is followed. */
+const CABLE_ROOM = 0.2
 
 const lowest = (pose: Pose): number => Math.min(...Object.values(pose).map((place) => place[2]))
 
@@ -99,12 +101,15 @@ function groundShapes(
       ),
     )
   }
-  if (bearsOn(mechanics, 'upperBack')) {
+  const against = upperBackOn(mechanics, frames[0]!.pose)
+  if (against === 'bench' || against === 'wall') {
     const contacts = frames.map(({ pose }) => upperBackContact(pose))
     const top = Math.min(...contacts.map((place) => place[2]))
     const x = contacts.reduce((sum, place) => sum + place[0], 0) / contacts.length
     const away = frames[0]!.pose['right.ankle'][0] > x ? -1 : 1
-    shapes.push(standOn(view, [x + away * 0.07, 0, 0], top, floor, 0.1, 0.22))
+    shapes.push(
+      against === 'wall' ? wall(view, [x, 0, 0], floor) : standOn(view, [x + away * 0.07, 0, 0], top, floor, 0.1, 0.22),
+    )
   }
   const padded = bearsOn(mechanics, 'seat', 'backPad', 'chestPad')
   const resting = padded || places.length === 0 ? frames.flatMap(({ pose }) => [pose.pelvis, pose.lumbar]) : []
@@ -132,13 +137,14 @@ export function drawExercise(mechanics: ExerciseMechanics, frames: readonly Solv
   const places = standingPlaces(mechanics, frames)
   const floor = floorOf(mechanics, frames, places)
   const ground = floor === null ? [] : groundShapes(view, mechanics, frames, places, floor)
+  const ceiling = Math.max(...frames.flatMap(({ pose }) => Object.values(pose).map((place) => place[2]))) + CABLE_ROOM
   const drawn = frames.map((frame): DrawnFrame => {
     const shapes = [
       ...ground,
       ...padShapes(view, mechanics, frame.pose, floor ?? lowest(frame.pose) - 0.04),
       ...bearingHandShapes(view, mechanics, frame.pose, floor),
       ...bodyShapes(view, frame.pose, handsLieFlat(mechanics)),
-      ...loadShapes(view, mechanics, frame),
+      ...loadShapes(view, mechanics, frame, ceiling),
     ].sort((a, b) => a.layer - b.layer)
     return { name: frame.name, pose: frame.pose, shapes }
   })

@@ -21,7 +21,7 @@ const SCREEN: Record<Ink, Paint> = {
   ground: { fill: 'var(--rule)', stroke: 'var(--body-line)', width: 0.4 },
   pad: { fill: 'var(--wash)', stroke: 'var(--pencil)', width: 0.6 },
   iron: { fill: 'var(--pencil)', stroke: 'none', width: 0, opacity: 0.75 },
-  plate: { fill: 'var(--pencil)', stroke: 'var(--ink)', width: 0.7, opacity: 0.28 },
+  plate: { fill: 'var(--pencil)', stroke: 'var(--ink)', width: 0.6, opacity: 0.22 },
   rod: { fill: 'var(--ink)', stroke: 'var(--card)', width: 0.35 },
   strap: { fill: 'none', stroke: 'var(--pencil)', width: 1.2 },
   band: { fill: 'none', stroke: 'var(--lichen)', width: 2 },

@@ -50,6 +50,6 @@ export function chooseView(mechanics: ExerciseMechanics, frames: readonly Solved
     case 'frontal':
       return lying ? viewFrom(34, 22) : viewFrom(56, 7)
     case 'transverse':
-      return lying ? viewFrom(34, 16) : viewFrom(36, 17)
+      return lying ? viewFrom(34, 16) : viewFrom(52, 24)
   }
 }

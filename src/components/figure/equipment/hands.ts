@@ -27,10 +27,18 @@ export function barThrough(view: View, pose: Pose, sides: readonly Side[], past 
 const handLayer = (view: View, pose: Pose, side: Side): number =>
   layerAt(view, between(pose[`${side}.wrist`], pose[`${side}.grip`], 0.5)) + limbBias(view, side) + 0.021
 
-/** A short handle through one hand. */
-export function handle(view: View, pose: Pose, side: Side, mechanics: ExerciseMechanics, half = 0.035): Shape {
+/** A short handle through one hand; a fixed one lies level however the hand is turned on it. */
+export function handle(
+  view: View,
+  pose: Pose,
+  side: Side,
+  mechanics: ExerciseMechanics,
+  half = 0.035,
+  fixed = false,
+): Shape {
   const grip = pose[`${side}.grip`]
-  const axis = gripAxis(pose, side, mechanics)
+  const turned = gripAxis(pose, side, mechanics)
+  const axis = fixed ? unit([turned[0], turned[1], 0], [1, 0, 0]) : turned
   return rod(
     view,
     'rod',
@@ -60,7 +68,7 @@ export function bearingHandShapes(view: View, mechanics: ExerciseMechanics, pose
   if (bearsOn(mechanics, 'offHand') && !bearsOn(mechanics, 'handsHanging', 'handsPushing')) return []
   if (bearsOn(mechanics, 'handsHanging')) {
     if (mechanics.grip !== 'neutral') return [barThrough(view, pose, sides, 0.14, -0.3)]
-    const above = sides.map((side) => handle(view, pose, side, mechanics, 0.06))
+    const above = sides.map((side) => handle(view, pose, side, mechanics, 0.06, true))
     return above
   }
   const shapes: Shape[] = []
@@ -71,7 +79,7 @@ export function bearingHandShapes(view: View, mechanics: ExerciseMechanics, pose
     for (const side of sides) {
       const grip = pose[`${side}.grip`]
       const layer = handLayer(view, pose, side) - 0.003
-      shapes.push(handle(view, pose, side, mechanics, 0.13))
+      shapes.push(handle(view, pose, side, mechanics, 0.13, true))
       for (const end of [-0.11, 0.11]) stand(add(grip, [end, 0, -BAR]), layer)
     }
     return shapes

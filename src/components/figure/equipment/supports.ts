@@ -92,7 +92,10 @@ function limbPad(
   const down = subtract([0, 0, -1], scale(along, -along[2]))
   const out = unit(down, [1, 0, 0])
   const face = add(between(from, to, share), scale(out, skin))
-  return [pad(view, face, along, scale(out, -1), long, 0.06), ...post(view, add(face, scale(out, 2 * THICK)), floor)]
+  return [
+    pad(view, face, along, scale(out, -1), long, 0.13, 0.4),
+    ...post(view, add(face, scale(out, 2 * THICK)), floor),
+  ]
 }
 
 const middle = (pose: Pose, name: 'shoulder' | 'elbow' | 'wrist', sides: readonly Side[]): Vector =>
@@ -102,6 +105,7 @@ const middle = (pose: Pose, name: 'shoulder' | 'elbow' | 'wrist', sides: readonl
 export function padShapes(view: View, mechanics: ExerciseMechanics, pose: Pose, floor: number): Shape[] {
   const shapes: Shape[] = []
   const sides = workingSides(mechanics)
+  if (upperBackOn(mechanics, pose) === 'sled') shapes.push(...backPad(view, pose, floor))
   if (bearsOn(mechanics, 'seat')) shapes.push(...seat(view, pose, floor))
   if (bearsOn(mechanics, 'backPad')) shapes.push(...backPad(view, pose, floor))
   if (bearsOn(mechanics, 'chestPad')) shapes.push(...chestPad(view, pose, floor))
@@ -153,6 +157,29 @@ function feetOf(mechanics: ExerciseMechanics, pose: Pose): readonly Side[] {
   if (mechanics.sides === 'both') return BOTH
   const low = (side: Side): number => Math.min(pose[`${side}.heel`][2], pose[`${side}.toe`][2])
   return low('left') - low('right') > 0.03 ? ['right'] : BOTH
+}
+
+/** What an upper back leans on: the pad of a machine, a wall when the trunk is upright, or else the edge of a bench. */
+export function upperBackOn(mechanics: ExerciseMechanics, pose: Pose): 'sled' | 'wall' | 'bench' | null {
+  if (!bearsOn(mechanics, 'upperBack')) return null
+  if (mechanics.guidance === 'fixedPath' || mechanics.guidance === 'leverMachine') return 'sled'
+  return chestAxes(pose).up[2] > 0.85 ? 'wall' : 'bench'
+}
+
+/** A wall behind an upright back. */
+export function wall(view: View, at: Vector, floor: number): Shape {
+  const tall = 0.5
+  return block(
+    view,
+    'pad',
+    [at[0] - 0.012, 0, floor + tall],
+    [
+      [0.012, 0, 0],
+      [0, 0.2, 0],
+      [0, 0, tall],
+    ],
+    BEHIND - 3,
+  )
 }
 
 /** The bench edge under the shoulder blades. */

@@ -8,7 +8,7 @@ import { disc, layerAt, line, rod } from '../solids'
 import type { View } from '../view'
 import { gripAxis } from './places'
 
-const PLATE = 0.115
+const PLATE = 0.095
 const HALF_BAR = 0.3
 
 /** A barbell with its middle at a place; the near plate is drawn over the body, see-through. */
@@ -31,6 +31,15 @@ export function dumbbell(view: View, pose: Pose, side: Side, mechanics: Exercise
   return [
     rod(view, 'rod', ends[0], ends[1], 0.008, layer),
     ...ends.map((end) => disc(view, 'plate', end, axis, 0.036, 0.04, layer + layerAt(view, end) - layerAt(view, grip))),
+  ]
+}
+
+/** One dumbbell between both hands. */
+export function sharedDumbbell(view: View, middle: Vector, axis: Vector): Shape[] {
+  const ends = [subtract(middle, scale(axis, 0.055)), add(middle, scale(axis, 0.055))] as const
+  return [
+    rod(view, 'rod', ends[0], ends[1], 0.012, 0.9),
+    ...ends.map((end) => disc(view, 'plate', end, axis, 0.05, 0.045, 0.91)),
   ]
 }
 

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { solveExercise } from '#shared/mechanics/index'
+import { solveExercise, type ExerciseMechanics } from '#shared/mechanics/index'
 import { SAMPLE_MECHANICS } from '#tests/support/sample-mechanics'
 import { drawExercise } from '@/components/figure/draw'
 import { discRadius, drawMarks, type Mark } from '@/components/figure/marks'
@@ -63,6 +63,16 @@ describe('drawExercise', () => {
       ({ shapes }) => shapes.find(({ ink }) => ink === 'wheel')!.path,
     )
     expect(new Set(wheels).size).toBe(1)
+  })
+
+  it('follows a cable to a far pulley only a little above the athlete', () => {
+    const { mechanics } = solved.find((one) => one.name === 'straightArmPulldown')!
+    const far = {
+      ...mechanics,
+      loads: [{ at: 'hands', direction: { toward: [0.55, 4], of: 'ankle' } }],
+    } as ExerciseMechanics
+    const height = drawExercise(far, solveExercise(far, 'male').frames).viewBox[3]
+    expect(height).toBeLessThan(180)
   })
 
   it('derives the equipment from supports, loads and guidance', () => {
