@@ -55,8 +55,11 @@ const CONTENT_SECURITY_POLICY = {
   },
 }
 
-/** Builds the app. Never listens: that is for main.ts and for tests. */
-export function createApp(dependencies: Dependencies): Express {
+/** Builds the app. Never listens: that is for main.ts and for tests. `more` serves further routes under the same roof. */
+export function createApp(
+  dependencies: Dependencies,
+  more: ReadonlyArray<(dependencies: Dependencies) => Router> = [],
+): Express {
   const { env, logger } = dependencies
   const app = express()
   app.disable('x-powered-by')
@@ -88,7 +91,7 @@ export function createApp(dependencies: Dependencies): Express {
   })
   app.use('/api', checkOrigin(env), cookieParser(), ...readBody)
   app.use(healthRoutes(dependencies), openApiRoutes())
-  for (const routes of FEATURES) app.use(routes(dependencies))
+  for (const routes of [...FEATURES, ...more]) app.use(routes(dependencies))
   for (const { path, handler } of methodNotAllowed()) app.all(path, handler)
   app.use('/api', () => {
     throw new AppError('not_found', 'There is nothing at this address.')
