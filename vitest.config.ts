@@ -8,7 +8,7 @@ export default defineConfig({
     projects: [
       { test: { name: 'shared', include: ['tests/shared/**/*.test.ts'] } },
       { test: { name: 'reference', include: ['tests/reference/**/*.test.ts'], testTimeout: 60_000 } },
-      { test: { name: 'house', include: ['tests/house/**/*.test.ts'], testTimeout: 60_000 } },
+      { test: { name: 'house', include: ['tests/house/**/*.test.ts'], testTimeout: 120_000 } },
       {
         test: {
           name: 'server',

@@ -23,5 +23,5 @@ export function logRequests(logger: Logger): RequestHandler {
     },
     customErrorMessage: () => 'request failed',
     customSuccessMessage: () => 'request',
-  }) as unknown as RequestHandler
+  })
 }

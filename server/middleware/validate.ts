@@ -3,7 +3,7 @@ import { AppError, type FieldError } from '../errors'
 
 const MAX_DEPTH = 32
 /** With the u flag a surrogate only matches when it stands alone. */
-// eslint-disable-next-line no-control-regex -- PostgreSQL cannot store NUL in text
+
 const UNSTORABLE = /[\u0000\ud800-\udfff]/u
 
 /**
