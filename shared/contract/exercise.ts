@@ -88,7 +88,7 @@ export const exerciseMechanics = z.strictObject({
   armPlane: z.enum(ARM_PLANES),
   supports: z.array(z.enum(SUPPORTS)).min(1, 'Say where the body bears.').max(4),
   rise: z.number().min(-1).max(1).optional(),
-  firstPushes: z.enum(['upright', 'squareToTrunk']).optional(),
+  firstPushes: z.enum(['upright', 'inward', 'squareToTrunk']).optional(),
   frames: z.array(frame).min(2, 'Give at least two postures.').max(4, 'Give at most four postures.'),
   balance: z
     .strictObject({

@@ -1,7 +1,7 @@
 import { segmentBodies } from './bodies'
 import { contactGroups, flatBack, UPRIGHT, type ContactGroup } from './contacts'
 import type { Arm, Balance, ExerciseMechanics, Frame, Leg } from './definition'
-import { atReference, groupCentre, pressureOffset, reactions } from './equilibrium'
+import { atReference, groupCentre, pressureOffset, reactions, weightCentre } from './equilibrium'
 import { MechanicsError } from './errors'
 import { gravityForces, loadForces, type Force } from './loads'
 import { solvePosture, type Posture } from './posture'
@@ -59,12 +59,10 @@ export interface LoadedPosture {
 
 function loaded(mechanics: ExerciseMechanics, frame: Frame, table: SegmentTable, path: string): LoadedPosture {
   const posture = solvePosture(mechanics, frame, table, path)
-  return {
-    posture,
-    groups: contactGroups(mechanics, posture),
-    body: gravityForces(segmentBodies(posture, table)),
-    load: loadForces(mechanics, posture).forces,
-  }
+  const body = gravityForces(segmentBodies(posture, table))
+  const load = loadForces(mechanics, posture).forces
+  const weightLine = weightCentre(atReference(mechanics, body, load))[0]
+  return { posture, groups: contactGroups(mechanics, posture, weightLine), body, load }
 }
 
 /** What must vanish: the pressure centre's offset over one support, or the error in height between two. */

@@ -4,7 +4,7 @@ import { MechanicsError } from './errors'
 import type { SolvedLeg } from './leg'
 import type { Posture } from './posture'
 import type { Vector } from './solution'
-import { between } from './vector'
+import { between, mean, unit } from './vector'
 import type { Support } from './vocabulary'
 
 /** Supports whose reaction statics can find; all others only hold what rests on them. */
@@ -114,9 +114,10 @@ function bearingLimbs(mechanics: ExerciseMechanics, support: Support): LimbIndex
 
 /**
  * The contacts whose reactions statics must find; empty when the body rests on a seat or pad.
+ * @param weightLine x of the centre of body and reference load
  * @throws MechanicsError unsupported_combination with more than two groups of contacts
  */
-export function contactGroups(mechanics: ExerciseMechanics, posture: Posture): ContactGroup[] {
+export function contactGroups(mechanics: ExerciseMechanics, posture: Posture, weightLine: number): ContactGroup[] {
   if (rests(mechanics)) return []
   if (mechanics.supports.length > 2) {
     throw new MechanicsError(
@@ -125,11 +126,8 @@ export function contactGroups(mechanics: ExerciseMechanics, posture: Posture): C
       'Statics can share weight between two supports at most.',
     )
   }
-  const push = flatBack(mechanics) ? posture.trunkAxes.forward : UPRIGHT
-  return mechanics.supports.map((support) => ({
-    support,
-    push,
-    contacts: bearingLimbs(mechanics, support).map((limb): Contact => {
+  return mechanics.supports.map((support): ContactGroup => {
+    const contacts = bearingLimbs(mechanics, support).map((limb): Contact => {
       const arm = posture.arms[limb]
       const leg = posture.legs[limb]
       const point = {
@@ -148,6 +146,13 @@ export function contactGroups(mechanics: ExerciseMechanics, posture: Posture): C
       }[support as keyof typeof BEARING_SEGMENT]
       const name = BEARING_SEGMENT[support as keyof typeof BEARING_SEGMENT]
       return { support, at: point, segment: name === 'upperTrunk' ? { name } : { name, limb } }
-    }),
-  }))
+    })
+    const [x, , z] = mean(contacts.map(({ at }) => at))
+    const push = {
+      upright: UPRIGHT,
+      inward: unit([weightLine - x, 0, posture.neckBase[2] - z]),
+      squareToTrunk: posture.trunkAxes.forward,
+    }[mechanics.firstPushes ?? 'upright']
+    return { support, contacts, push }
+  })
 }

@@ -24,11 +24,14 @@ export interface ExerciseMechanics {
   /** Height of the first support above the second when two bear (a hand on a low bar, a foot on a bench), × stature. */
   rise?: number
   /**
-   * Which way the first of two supports pushes: upright (the ground, a bench edge, a bar) unless it is `squareToTrunk`, a
-   * wall or sliding back pad that pushes out of the middle of the back alone. Then no `rise` applies and there is nothing
-   * to balance, and the back, flat on its pad from pelvis to shoulders, asks nothing of the trunk muscles.
+   * Which way the first of two supports pushes. Upright (the ground under a plank, a bench edge, a bar) unless said.
+   * `inward`, as feet far apart push against the floor's friction: statics leaves the friction open, so both forces are taken
+   * to meet on the line of weight at shoulder height (they must meet on that line to balance; the height is our rule: above
+   * the mass centre, as in walking).
+   * `squareToTrunk` is a wall or sliding back pad that pushes out of the middle of the back alone: then no `rise` applies and
+   * there is nothing to balance, and the back, flat on its pad from pelvis to shoulders, asks nothing of the trunk muscles.
    */
-  firstPushes?: 'upright' | 'squareToTrunk'
+  firstPushes?: 'upright' | 'inward' | 'squareToTrunk'
   /** Two to four postures through the repetition, in order. */
   frames: Frame[]
   balance?: Balance

@@ -35,7 +35,7 @@ export const groupCentre = (group: ContactGroup): Vector => mean(group.contacts.
  * Support reactions that hold the given forces, linear in them.
  *
  * One group takes the whole force and, as a couple, the offset of the pressure centre from its contact. Of two groups
- * the first takes a force of known direction (upright, or square to the trunk), sized so that moments
+ * the first takes a force of known direction (upright, inward, or square to the trunk), sized so that moments
  * in the sagittal plane balance; everything else goes to the second. No group: the body rests on pads and nothing is solved.
  */
 export function reactions(groups: readonly ContactGroup[], applied: readonly Force[]): Force[] {
@@ -95,6 +95,15 @@ export const atReference = (mechanics: ExerciseMechanics, body: readonly Force[]
     ...(each.couple ? { couple: scale(each.couple, mechanics.referenceLoad) } : {}),
   })),
 ]
+
+/** Centre of the weights among the given forces. */
+export function weightCentre(applied: readonly Force[]): Vector {
+  const weight = applied.reduce((sum, { force }) => sum + force[2], 0)
+  return scale(
+    applied.reduce<Vector>((sum, { at, force }) => add(sum, scale(at, force[2])), ZERO),
+    1 / weight,
+  )
+}
 
 /** How far forward of `target` the pressure centre lies at a horizontal level through it, in stature fractions. */
 export function pressureOffset(applied: readonly Force[], target: Vector): number {
