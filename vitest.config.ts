@@ -20,6 +20,20 @@ export default defineConfig({
           hookTimeout: 60_000,
         },
       },
+      // The last two look at what was built and are run by `npm test` after the build.
+      { test: { name: 'build', include: ['tests/build/**/*.test.ts'] } },
+      {
+        test: {
+          name: 'e2e',
+          include: ['tests/e2e/**/*.test.ts'],
+          globalSetup: ['tests/support/e2e-setup.ts'],
+          pool: 'forks',
+          // The journeys share one server and two processor cores.
+          fileParallelism: false,
+          testTimeout: 120_000,
+          hookTimeout: 120_000,
+        },
+      },
       {
         plugins: [react()],
         resolve: { alias },

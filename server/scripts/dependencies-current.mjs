@@ -8,7 +8,8 @@ try {
   const installed = packages('node_modules/.package-lock.json')
   const current = Object.entries(wanted).every(
     ([path, { version, optional, peer }]) =>
-      path === '' || (installed[path] === undefined ? optional === true || peer === true : installed[path].version === version),
+      path === '' ||
+      (installed[path] === undefined ? optional === true || peer === true : installed[path].version === version),
   )
   process.exit(current ? 0 : 1)
 } catch {

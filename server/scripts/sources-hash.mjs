@@ -18,7 +18,11 @@ const SOURCES = [
 ]
 
 const files = (path) =>
-  statSync(path).isDirectory() ? readdirSync(path).toSorted().flatMap((name) => files(join(path, name))) : [path]
+  statSync(path).isDirectory()
+    ? readdirSync(path)
+        .toSorted()
+        .flatMap((name) => files(join(path, name)))
+    : [path]
 
 const hash = createHash('sha256')
 for (const source of SOURCES.filter((path) => existsSync(path)).flatMap(files)) {
