@@ -42,19 +42,21 @@ install_postgres() {
 # PostgreSQL refuses to run as root.
 as_owner() { if is_root; then (cd / && runuser -u postgres -- "$@"); else "$@"; fi; }
 
-choose_data_folder() {
-  if [ -s "$state/folder" ]; then
-    home=$(cat "$state/folder")
-  else
-    home=$state
-    if is_root && ! as_owner test -x "$state"; then
-      home=/var/lib/pintle-$(printf '%s' "$project" | sha256sum | cut -c1-12)-$name
-      say "The user postgres cannot reach $state (a folder above it is closed to others)."
-      say "The database is kept in $home instead."
-    fi
-    printf '%s' "$home" >"$state/folder"
-  fi
+# Where the database lies: under .data, unless the database's user cannot get there.
+locate() {
+  home=$state
+  if [ -s "$state/elsewhere" ]; then home=$(cat "$state/elsewhere"); fi
   data=$home/data
+}
+
+choose_data_folder() {
+  if is_root && [ ! -s "$state/elsewhere" ] && ! as_owner test -x "$state"; then
+    elsewhere=/var/lib/pintle-$(printf '%s' "$project" | sha256sum | cut -c1-12)-$name
+    say "The user postgres cannot reach $state (a folder above it is closed to others)."
+    say "The database is kept in $elsewhere instead."
+    printf '%s' "$elsewhere" >"$state/elsewhere"
+  fi
+  locate
   mkdir -p "$data" || fail "The folder $data cannot be made."
   if is_root; then
     chmod 711 "$home"
@@ -66,7 +68,9 @@ choose_data_folder() {
 }
 
 create_cluster() {
-  if [ -f "$data/PG_VERSION" ]; then
+  # The mark is set last: what an interrupted creation left behind is no cluster.
+  if [ -f "$home/created" ]; then
+    [ -f "$data/PG_VERSION" ] || fail "The database in $data is damaged: PG_VERSION is missing."
     wanted=$(cat "$data/PG_VERSION")
     if [ ! -x "/usr/lib/postgresql/$wanted/bin/postgres" ]; then
       [ "$("$bin/postgres" --version | sed 's/[^0-9]*\([0-9]*\).*/\1/')" = "$wanted" ] ||
@@ -74,15 +78,14 @@ create_cluster() {
     else
       bin=/usr/lib/postgresql/$wanted/bin
     fi
-    [ -s "$state/password" ] || fail "The password file $state/password is gone. Restore it, or delete $data to start afresh."
+    [ -s "$home/password" ] || fail "The password file $home/password is gone. Restore it, or delete $home to start afresh."
     return 0
   fi
   say "Creating a private PostgreSQL cluster …"
-  (umask 077 && node -e 'process.stdout.write(require("node:crypto").randomBytes(24).toString("base64url"))' >"$state/password")
-  # initdb is interrupted rarely, but what it left behind would stop it the next time.
+  (umask 077 && node -e 'process.stdout.write(require("node:crypto").randomBytes(24).toString("base64url"))' >"$home/password")
   find "$data" -mindepth 1 -delete
   rm -rf "$home/initdb-password"
-  (umask 077 && cp "$state/password" "$home/initdb-password")
+  (umask 077 && cp "$home/password" "$home/initdb-password")
   if is_root; then chown postgres: "$home/initdb-password"; fi
   as_owner "$bin/initdb" -D "$data" -U pintle -A scram-sha-256 --pwfile="$home/initdb-password" \
     -E UTF8 --locale=C.UTF-8 >"$state/initdb.log" 2>&1 || {
@@ -97,6 +100,7 @@ create_cluster() {
       printf "fsync = off\nsynchronous_commit = off\nfull_page_writes = off\nmax_connections = 200\n"
     fi
   } >>"$data/postgresql.conf"
+  : >"$home/created"
 }
 
 # True when the process that postmaster.pid names is this cluster's server; after a reboot it may be anybody.
@@ -120,11 +124,11 @@ start_cluster() {
 }
 
 ensure_application_database() {
-  PGPASSWORD=$(cat "$state/password")
+  PGPASSWORD=$(cat "$home/password")
   export PGPASSWORD
   export PGCONNECT_TIMEOUT=10
   found=$("$bin/psql" -h 127.0.0.1 -p "$port" -U pintle -d postgres -XAtc "select 1 from pg_database where datname = 'pintle'") ||
-    fail "PostgreSQL runs but refuses the password in $state/password."
+    fail "PostgreSQL runs but refuses the password in $home/password."
   if [ "$found" != 1 ]; then
     "$bin/createdb" -h 127.0.0.1 -p "$port" -U pintle pintle || fail "The database could not be created."
   fi
@@ -154,8 +158,7 @@ watch_users() {
 
 if [ "$user_pid" = --watch ]; then
   find_binaries
-  home=$(cat "$state/folder")
-  data=$home/data
+  locate
   watch_users
   exit 0
 fi
@@ -176,4 +179,4 @@ if [ -n "$user_pid" ]; then
 fi
 database=pintle
 [ "$name" = main ] || database=postgres
-printf 'postgres://pintle:%s@127.0.0.1:%s/%s\n' "$(cat "$state/password")" "$port" "$database"
+printf 'postgres://pintle:%s@127.0.0.1:%s/%s\n' "$(cat "$home/password")" "$port" "$database"
