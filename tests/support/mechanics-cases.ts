@@ -345,6 +345,31 @@ export const wallSit = (): ExerciseMechanics => ({
   frames: held({ trunk: { lean: 0 }, arms: { shoulder: 0, elbow: 0 }, legs: { thigh: 80, shank: 0 } }),
 })
 
+/** Feet far apart, the rear one on its ball; they push toward each other against the floor. */
+export const splitSquat = (): ExerciseMechanics => ({
+  ...base,
+  sides: 'oneAtATime',
+  supports: ['feet', 'offFoot'],
+  firstPushes: 'inward',
+  balance: { solve: 'legs' },
+  frames: [
+    {
+      name: 'tall',
+      trunk: { lean: 5 },
+      arms: { shoulder: 5, elbow: 0 },
+      legs: { ankle: [0.2, -0.38] },
+      offLeg: { thigh: -25, shank: -40, foot: 50 },
+    },
+    {
+      name: 'low',
+      trunk: { lean: 8 },
+      arms: { shoulder: 8, elbow: 0 },
+      legs: { ankle: [0.22, -0.28] },
+      offLeg: { thigh: -5, shank: -75, foot: 60 },
+    },
+  ],
+})
+
 export const MECHANICS_CASES: Readonly<Record<string, ExerciseMechanics>> = {
   pullUp: hang(),
   chinUp: hang({ armPlane: 'sagittal', grip: 'underhand' }),
@@ -379,4 +404,5 @@ export const MECHANICS_CASES: Readonly<Record<string, ExerciseMechanics>> = {
   plank: plank(),
   legPress: legPress(),
   wallSit: wallSit(),
+  splitSquat: splitSquat(),
 }
