@@ -80,7 +80,7 @@ export function DataTable<Row extends RowData>({
   const width = columns.length + (detail === undefined ? 0 : 1)
   return (
     <div
-      className="overflow-x-auto rounded-xl border border-rule bg-card"
+      className="relative overflow-x-auto rounded-xl border border-rule bg-card"
       tabIndex={0}
       role="region"
       aria-label={caption}

@@ -23,8 +23,9 @@ export function Dialog({ open, onClose, title, description, step, footer, childr
   useEffect(() => {
     if (shown.current === step) return
     shown.current = step
-    page.current?.scrollTo({ top: 0 })
-    page.current?.focus({ preventScroll: true })
+    if (page.current === null) return
+    page.current.scrollTop = 0
+    page.current.focus({ preventScroll: true })
   }, [step])
   return (
     <Radix.Root open={open} onOpenChange={(next) => !next && onClose()}>

@@ -4,13 +4,20 @@ import { Card } from '@/components/ui/card'
 import { formatAgo, formatInstant, formatShortDay } from '@/lib/format'
 import { capitalise, jointWords, listWords, PROVOCATION_WORDS, RED_FLAG_WORDS } from '@/lib/words'
 
+interface SoreJointCardProps {
+  report: SoreJoint
+  /** Level under the page’s own headings. */
+  heading?: 'h2' | 'h3'
+  children?: ReactNode
+}
+
 /** One report with all it says; `children` are what can be done about it. */
-export function SoreJointCard({ report, children }: { report: SoreJoint; children?: ReactNode }) {
+export function SoreJointCard({ report, heading: Heading = 'h2', children }: SoreJointCardProps) {
   const red = report.state === 'redFlag'
   return (
     <Card hit={red} className="p-4">
       <div className="flex items-start justify-between gap-4">
-        <h3 className="text-lg">{capitalise(jointWords(report.joint, report.side))}</h3>
+        <Heading className="text-lg">{capitalise(jointWords(report.joint, report.side))}</Heading>
         {red ? (
           <span className="rounded-full border border-oxide px-3 font-semibold text-oxide">red flag</span>
         ) : (

@@ -27,7 +27,9 @@ export function SoreJointDialog({ athleteId, day, onClose, onReported }: SoreJoi
   const [leaving, setLeaving] = useState(false)
   const report = useReportSoreJoint(athleteId)
 
-  const close = () => (step !== 'advice' && form.formState.isDirty ? setLeaving(true) : onClose())
+  // Read while rendering: the form only keeps track of what a render asked for.
+  const { isDirty } = form.formState
+  const close = () => (step !== 'advice' && isDirty ? setLeaving(true) : onClose())
   const next = async () => {
     const names = RED_FLAGS.map((flag) => `redFlags.${flag}` as const)
     if (await form.trigger(names, { shouldFocus: true })) setStep('details')

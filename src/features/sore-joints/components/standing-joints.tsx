@@ -39,7 +39,7 @@ export function StandingJoints({ athleteId, own, empty }: StandingJointsProps) {
             <ul className="grid gap-3">
               {items.map((report) => (
                 <li key={report.id}>
-                  <SoreJointCard report={report}>
+                  <SoreJointCard report={report} heading={own ? 'h2' : 'h3'}>
                     {report.state === 'redFlag' && own && (
                       <div className="mt-3">
                         <StopAdvice flags={report.redFlags} />
