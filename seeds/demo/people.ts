@@ -1,6 +1,7 @@
 import type { DemoAccount } from '#shared/contract/auth'
 import type { ExerciseDocument } from '#shared/contract/exercise'
 import type { Role } from '#shared/contract/me'
+import type { Action } from '#shared/mechanics/vocabulary'
 import type { Sex } from '#shared/mechanics/sex'
 import { QUARRY_LANE, ROOM, SALTMARSH, YARD, type DemoClub, type DemoPlace } from './clubs'
 import { demoId } from './random'
@@ -32,6 +33,12 @@ export interface DemoAthlete extends DemoPerson {
   skill: ExerciseDocument['skill']
   /** Own strength against the average adult, all actions alike before the small differences of a real body. */
   strength: number
+  /** Strength of hips, knees and ankles against the rest: those who live on the bar have lighter legs. */
+  legs: number
+  /** Where the sport made them stronger than they are elsewhere. */
+  trained: Partial<Record<Action, number>>
+  /** Loads (kg) that the demo is told with, by exercise; all others are worked out from the strength. */
+  loads: Readonly<Record<string, number>>
   place: DemoPlace
   /** Which week they follow, and on which weekday (0–6) it begins against the demo's day. */
   programme: 'bars' | 'barsBeginner' | 'barbell' | 'barbellBeginner'
@@ -52,12 +59,16 @@ export const ROOM_COACH = person('Petra Lindqvale', 'coach', [SALTMARSH])
 export const PHYSIO = person('Anouk Verrin', 'physio', BOTH)
 export const STAFF = [ADMIN, YARD_COACH, ROOM_COACH, PHYSIO]
 
-type Details = Omit<DemoAthlete, keyof DemoPerson | 'place' | 'consents'> &
-  Partial<Pick<DemoAthlete, 'place' | 'consents'>>
+type Usual = 'place' | 'consents' | 'legs' | 'trained' | 'loads'
+type Details = Omit<DemoAthlete, keyof DemoPerson | Usual> & Partial<Pick<DemoAthlete, Usual>>
+
+/** Years of pull-ups show in what pulls the arms down. */
+const PULLERS = { shoulderAdduction: 1.2 }
 
 function athlete(name: string, clubs: DemoClub[], details: Details): DemoAthlete {
   const place = clubs.includes(QUARRY_LANE) ? YARD : ROOM
-  return { ...person(name, 'athlete', clubs), place, consents: true, ...details }
+  const trained = details.programme === 'bars' ? PULLERS : {}
+  return { ...person(name, 'athlete', clubs), place, consents: true, legs: 1, trained, loads: {}, ...details }
 }
 
 /** Trains in the yard and has a key to the room with the cables: the demo is told from her day. */
@@ -67,7 +78,9 @@ export const ILSE = athlete('Ilse Tamm', BOTH, {
   stature: 1.68,
   age: 31,
   skill: 'advanced',
-  strength: 1.9,
+  strength: 1.8,
+  legs: 0.75,
+  loads: { 'pull-up-overhand': 5 },
   programme: 'bars',
   phase: 0,
 })
@@ -153,7 +166,8 @@ export const ATHLETES: DemoAthlete[] = [
     stature: 1.59,
     age: 22,
     skill: 'advanced',
-    strength: 1.85,
+    strength: 1.75,
+    legs: 0.8,
     programme: 'bars',
     phase: 3,
   }),

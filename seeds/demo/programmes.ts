@@ -2,7 +2,7 @@ import type { Intent } from '#shared/contract/session'
 import type { TargetGroup } from '#shared/rules/muscle-names'
 import type { DemoAthlete } from './people'
 
-/** One planned exercise; its load is worked out from the athlete's strength unless it is given. */
+/** One planned exercise; its load is worked out from the athlete's strength. */
 export interface PlannedExercise {
   slug: string
   sets: number
@@ -11,8 +11,6 @@ export interface PlannedExercise {
   rir: number
   intent: Intent
   target: TargetGroup
-  /** kg, for the sessions that the demo is told from. */
-  load?: number
 }
 
 export interface PlannedDay {
@@ -31,8 +29,7 @@ const plan = (
   rir: number,
   intent: Intent,
   target: TargetGroup,
-  load?: number,
-): PlannedExercise => ({ slug, sets, count, rir, intent, target, ...(load === undefined ? {} : { load }) })
+): PlannedExercise => ({ slug, sets, count, rir, intent, target })
 
 const BARS: Week = [
   {
@@ -40,7 +37,7 @@ const BARS: Week = [
     minutes: 55,
     exercises: [
       plan('front-lever-tuck', 5, 8, 2, 'skill', 'lats'),
-      plan('pull-up-overhand', 4, 6, 2, 'strength', 'lats', 5),
+      plan('pull-up-overhand', 4, 6, 2, 'strength', 'lats'),
       plan('chest-supported-row-dumbbells', 3, 10, 2, 'size', 'upperBack'),
       plan('incline-dumbbell-curl', 3, 12, 1, 'size', 'biceps'),
       plan('hanging-leg-raise', 3, 10, 2, 'endurance', 'abdomen'),

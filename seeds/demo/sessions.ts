@@ -34,8 +34,11 @@ export interface DemoSession {
 /** What the demo needs to know of an exercise and of an athlete's strength in it. */
 export interface Strength {
   unit(slug: string): Dose['unit']
-  /** kg that leaves `rir` repetitions in reserve after `count`, as the place can set it; null is body weight alone. */
-  workingLoad(athlete: DemoAthlete, planned: PlannedExercise): number | null
+  /**
+   * kg that leaves `rir` repetitions in reserve after `count`, for somebody who has a share of the athlete's strength,
+   * as the place can set it; null is body weight alone.
+   */
+  workingLoad(athlete: DemoAthlete, planned: PlannedExercise, share: number): number | null
   pieces(slug: string): number
 }
 
@@ -54,7 +57,7 @@ function toSlot(
   strength: Strength,
 ): DemoSlot {
   const { load: share, lighter } = weekShare(offset)
-  const load = planned.load ?? strength.workingLoad({ ...athlete, strength: athlete.strength * share }, planned)
+  const load = athlete.loads[planned.slug] ?? strength.workingLoad(athlete, planned, share)
   return {
     id: demoId('slot', sessionId, String(index)),
     position: index + 1,
@@ -72,9 +75,9 @@ function toSlot(
   }
 }
 
-/** The athlete's sessions around `now`, oldest first. */
-export function sessionsOf(athlete: DemoAthlete, now: Date, strength: Strength): DemoSession[] {
-  const offsets = Array.from({ length: PAST_DAYS + COMING_DAYS + 1 }, (_, index) => index - PAST_DAYS)
+/** The athlete's sessions around `now`, oldest first, `from` so many days after it. */
+export function sessionsOf(athlete: DemoAthlete, now: Date, strength: Strength, from = -PAST_DAYS): DemoSession[] {
+  const offsets = Array.from({ length: COMING_DAYS - from + 1 }, (_, index) => from + index)
   return offsets.flatMap((offset) => {
     const planned = plannedDay(athlete, offset)
     if (planned === null) return []

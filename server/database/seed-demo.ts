@@ -61,7 +61,7 @@ async function carryOn(dataSource: Dependencies['dataSource'], edition: Catalogu
     const added: DemoSession[] = []
     for (const athlete of ATHLETES) {
       const reached = last.get(athlete.id) ?? ''
-      const planned = sessionsOf(athlete, now, strength)
+      const planned = sessionsOf(athlete, now, strength, 0)
       added.push(...planned.filter(({ day }) => day > reached))
       const today = planned.find(({ offset }) => offset === 0)
       if (TOLD.includes(athlete) && today !== undefined && today.day <= reached) {
