@@ -109,7 +109,7 @@ function SwapCard({ row, joints, target, load, thumbnail, detail, onTake, taking
             disabled={disabled}
             busyLabel="Taking"
           >
-            Take for today<span className="sr-only">: {row.exercise.name}</span>
+            Take for today <span className="sr-only">{row.exercise.name}</span>
           </Button>
         )}
         <Button
@@ -118,8 +118,8 @@ function SwapCard({ row, joints, target, load, thumbnail, detail, onTake, taking
           aria-controls={open ? id : undefined}
           onClick={() => setOpen(!open)}
         >
-          {open ? 'Less' : 'More'}
-          <span className="sr-only"> about {row.exercise.name}</span>
+          {open ? 'Less ' : 'More '}
+          <span className="sr-only">about {row.exercise.name}</span>
           <Icon of={open ? ChevronUp : ChevronDown} />
         </Button>
       </div>
