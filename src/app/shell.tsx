@@ -38,7 +38,7 @@ function Top({ person }: { person: Me }) {
         {place?.name ?? clubs}
         {place !== undefined && (
           <Link to={`${paths.me()}#place`} className="ml-2 link max-md:hidden">
-            change<span className="sr-only"> place</span>
+            change <span className="sr-only">place</span>
           </Link>
         )}
       </p>

@@ -46,8 +46,7 @@ export function Field({ label, unit, hint, error, labelHidden = false, className
     <FieldContext value={{ id, describedBy, invalid: error !== undefined, unit }}>
       <div className={cx('flex flex-col gap-1', className)}>
         <label htmlFor={id} className={labelHidden ? 'sr-only' : 'font-semibold'}>
-          {label}
-          {unit !== undefined && <span className="sr-only"> in {unit}</span>}
+          {label} {unit !== undefined && <span className="sr-only">in {unit}</span>}
         </label>
         {children}
         {hint !== undefined && (

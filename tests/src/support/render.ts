@@ -8,6 +8,9 @@ import { ToastProvider } from '@/components/ui/toast'
 import { PersonProvider } from '@/lib/person'
 import { createQueryClient } from '@/lib/query-client'
 
+// jsdom has no pointer capture; the toast’s swipe asks for it.
+Element.prototype.hasPointerCapture ??= () => false
+
 interface Options {
   person?: Me | null
   path?: string

@@ -64,7 +64,8 @@ const bodyMassLimits = (units: Units) => {
   return `Enter a body mass from ${least} to ${most} ${massUnit(units)}.`
 }
 const statureLimits = (units: Units) => {
-  if (units === 'metric') return `Enter a height from ${LIMITS.stature.min * 100} to ${LIMITS.stature.max * 100} cm.`
+  if (units === 'metric')
+    return `Enter a height from ${metresToCentimetres(LIMITS.stature.min)} to ${metresToCentimetres(LIMITS.stature.max)} cm.`
   const [least, most] = [LIMITS.stature.min, LIMITS.stature.max].map(metresToFeet)
   return `Enter a height from ${least!.feet} ft ${least!.inches} in to ${most!.feet} ft ${most!.inches} in.`
 }

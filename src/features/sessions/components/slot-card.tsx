@@ -69,7 +69,7 @@ function Actions({ slot, name, onUndo, undoing }: SlotCardProps & { name: string
     <div className="-mb-2 flex flex-wrap items-center gap-x-5 sm:mb-0 sm:flex-col sm:items-end sm:justify-center">
       {can.swap && !stopped && (
         <Link to={paths.slotSwaps(slot.id)} className="inline-flex min-h-target items-center font-semibold link">
-          See swaps<span className="sr-only"> for {name}</span>
+          See swaps <span className="sr-only">for {name}</span>
         </Link>
       )}
       {undo !== null && (
