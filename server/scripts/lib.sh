@@ -15,12 +15,19 @@ install_packages() {
     fail "$purpose is missing. Install it (Debian: apt-get install $*), then run this again."
   fi
   say "Installing $purpose ($*) …"
+  mkdir -p .data
   if [ -z "${PINTLE_APT_UPDATED:-}" ]; then
-    apt-get update -qq >&2 || fail "apt-get update failed; $purpose could not be installed. Check the network."
+    apt-get update -qq >.data/apt.log 2>&1 || {
+      tail -n 5 .data/apt.log >&2
+      fail "apt-get update failed; $purpose could not be installed. Check the network."
+    }
     PINTLE_APT_UPDATED=1
   fi
   DEBIAN_FRONTEND=noninteractive apt-get install -y -qq --no-install-recommends \
-    -o Dpkg::Options::=--force-confold "$@" >&2 || fail "$purpose could not be installed: see the lines above."
+    -o Dpkg::Options::=--force-confold "$@" >.data/apt.log 2>&1 || {
+    tail -n 10 .data/apt.log >&2
+    fail "$purpose could not be installed: see the lines above (.data/apt.log)."
+  }
 }
 
 require_node() {
