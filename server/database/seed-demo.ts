@@ -1,9 +1,10 @@
+import { SEXES } from '#shared/mechanics/sex'
 import { randomFrom } from '../../seeds/demo/random'
 import { ATHLETES, ILSE, OSWIN, type DemoAthlete } from '../../seeds/demo/people'
 import { dayAt, sessionsOf, type DemoSession } from '../../seeds/demo/sessions'
 import { soreJointsOf } from '../../seeds/demo/soreness'
 import type { Dependencies } from '../dependencies'
-import type { CatalogueEdition } from '../features/exercises/catalogue'
+import type { CatalogueEdition } from '../features/exercises/catalogue-edition'
 import { demoStrength } from './demo/strength'
 import {
   insertPeople,
@@ -38,7 +39,7 @@ export async function seedDemo(
   { dataSource, catalogue }: Pick<Dependencies, 'dataSource' | 'catalogue'>,
   now: Date,
 ): Promise<DemoSummary> {
-  const edition = await catalogue.latest()
+  const edition = await catalogue.latest(SEXES)
   if (await isSeeded(dataSource)) return { fresh: false, swaps: 0, sessions: await carryOn(dataSource, edition, now) }
   const sessions = ATHLETES.flatMap((athlete) => sessionsOf(athlete, now, demoStrength(edition)))
   const soreJoints = ATHLETES.flatMap((athlete) => soreJointsOf(athlete, now))

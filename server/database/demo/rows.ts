@@ -6,7 +6,7 @@ import { demoId } from '../../../seeds/demo/random'
 import type { DemoSession } from '../../../seeds/demo/sessions'
 import type { DemoSoreJoint } from '../../../seeds/demo/soreness'
 import { hashPassword } from '../../features/auth/password-hash'
-import type { CatalogueEdition } from '../../features/exercises/catalogue'
+import type { CatalogueEdition } from '../../features/exercises/catalogue-edition'
 import { strengthFactors } from './strength'
 
 const DAY = 24 * 60 * 60 * 1000

@@ -5,7 +5,7 @@ import type { PlannedExercise } from '../../../seeds/demo/programmes'
 import { randomFrom } from '../../../seeds/demo/random'
 import type { Strength } from '../../../seeds/demo/sessions'
 import { ACTION_JOINT, ACTIONS, type Action, type Joint } from '#shared/mechanics/vocabulary'
-import type { CatalogueEdition } from '../../features/exercises/catalogue'
+import type { CatalogueEdition } from '../../features/exercises/catalogue-edition'
 
 const LEGS: readonly Joint[] = ['hip', 'knee', 'ankle']
 
@@ -31,12 +31,13 @@ export const toEngineAthlete = (athlete: DemoAthlete): Athlete => ({
 const HALVINGS = 14
 
 function heaviestAtDemand(candidate: Candidate, athlete: Athlete, demand: number, edition: CatalogueEdition): number {
-  const movement = { ...candidate, mechanics: candidate.document.mechanics }
+  const { document, solution, coordination } = candidate
+  const movement = { mechanics: document.mechanics, solution, coordination }
   const hardest = (load: number) =>
     Math.max(
       ...previewOf(movement, athlete, load, [], edition.ruleSet).frames.map(({ actions }) => actions[0]?.demand ?? 0),
     )
-  const { kind, least = 0, most = 100 } = candidate.document.load
+  const { kind, least = 0, most = 100 } = document.load
   let [low, high] = kind === 'assistance' ? [-most, -least] : [least, most]
   for (let halving = 0; halving < HALVINGS; halving += 1) {
     const middle = (low + high) / 2

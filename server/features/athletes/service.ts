@@ -33,7 +33,8 @@ export async function list(
   const sore = await findStandingOf(manager, ids)
   const days = new Map((await findDays(manager, ids, query.day)).map((day) => [day.athleteId, day]))
   await recordAudit(manager, { actor, action: 'read.athletes', subject: null, details: { athleteIds: ids.join(' ') } })
-  const edition = await catalogue.latest()
+  const sexes = [...days.values()].map(({ profile }) => profile?.sex ?? 'unspecified')
+  const edition = await catalogue.latest([...new Set(sexes)])
   const now = clock.now()
   const items = rows.map((row) => {
     const day = days.get(row.id)

@@ -1,11 +1,10 @@
-import { LRUCache } from 'lru-cache'
-import type { DataSource } from 'typeorm'
-import type { Exercise, ExerciseDocument } from '#shared/contract/exercise'
-import { ruleSet as ruleSetSchema, type RuleSet } from '#shared/contract/rule-set'
+import type { DataSource, EntityManager } from 'typeorm'
+import { ruleSet as ruleSetSchema } from '#shared/contract/rule-set'
 import type { Sex } from '#shared/mechanics/sex'
-import { musclesOf, type Candidate } from '#shared/rules/index'
+import type { ExerciseSolution } from '#shared/mechanics/solution'
 import { AppError } from '../../errors'
-import type { Solutions } from './entity'
+import { CatalogueEdition, type KeptVersion } from './catalogue-edition'
+import { packSolution, type PackedSolution } from './packed-solution'
 
 /** Which catalogue and which rules an answer is made from; selected together with an answer's other inputs. */
 export interface Edition {
@@ -13,97 +12,46 @@ export interface Edition {
   ruleSetVersion: number | null
 }
 
-/** SQL columns of the edition that stands now, for a query that has nothing else to join. */
+/** SQL columns of the edition that stands now. */
 export const EDITION_SQL = `
   (select cs.revision from catalogue_state cs where cs.id = 1) as revision,
   (select rs.version from rule_sets rs where rs.is_active) as "ruleSetVersion"`
 
-interface VersionRow {
-  id: string
-  versionId: string
-  coordination: number
-  document: ExerciseDocument
-  solutions: Solutions
-}
-
 /** Rows that are read from the database at once, so that memory does not peak while a long catalogue is loaded. */
-const BATCH = 200
+const BATCH = 100
 
-/** All published exercises and the active rules at one moment. */
-export class CatalogueEdition {
-  constructor(
-    readonly revision: number,
-    readonly ruleSet: RuleSet,
-    private readonly entries: ReadonlyMap<string, VersionRow>,
-  ) {}
-
-  /** Which muscles an exercise drives follows from its version and the rules alone. */
-  private readonly muscles = new LRUCache<string, Exercise['muscles']>({ max: 2000 })
-  private readonly bySex = new Map<Sex, ReadonlyMap<string, Candidate>>()
-
-  private candidateMap(sex: Sex): ReadonlyMap<string, Candidate> {
-    const known = this.bySex.get(sex)
-    if (known !== undefined) return known
-    const made = new Map(
-      [...this.entries].map(([id, { versionId, coordination, document, solutions }]) => [
-        id,
-        { id, versionId, coordination, document, solution: solutions[sex] },
-      ]),
-    )
-    this.bySex.set(sex, made)
-    return made
-  }
-
-  candidates(sex: Sex): Candidate[] {
-    return [...this.candidateMap(sex).values()]
-  }
-
-  find(sex: Sex, exerciseId: string): Candidate | null {
-    return this.candidateMap(sex).get(exerciseId) ?? null
-  }
-
-  /** The muscles an average adult drives with it. */
-  musclesOf(exerciseId: string): Exercise['muscles'] {
-    const known = this.muscles.get(exerciseId)
-    if (known !== undefined) return known
-    const candidate = this.find('unspecified', exerciseId)
-    if (candidate === null) return []
-    const { document, solution } = candidate
-    const muscles = musclesOf({ mechanics: document.mechanics, solution }, this.ruleSet)
-    this.muscles.set(exerciseId, muscles)
-    return muscles
-  }
-
-  /** For the next edition: versions that are still current need not be read again. */
-  get rows(): ReadonlyMap<string, VersionRow> {
-    return this.entries
-  }
-}
+const inBatches = <T>(items: readonly T[]): T[][] =>
+  Array.from({ length: Math.ceil(items.length / BATCH) }, (_, index) => items.slice(index * BATCH, (index + 1) * BATCH))
 
 /**
  * The published exercises, kept in memory: ranking reads all of them for every answer. Each request learns from its
- * own query which edition stands; when that is newer than the one in memory, what changed is read first.
+ * own query which edition stands; when that is newer than the one in memory, what changed is read first. Coefficients
+ * are read per sex when the first athlete of that sex needs them.
  */
 export class Catalogue {
   private current: CatalogueEdition | null = null
   private loading: Promise<CatalogueEdition> | null = null
+  private readonly packed = new Map<Sex, ReadonlyMap<string, PackedSolution>>()
+  private readonly packing = new Map<string, Promise<void>>()
 
   constructor(private readonly dataSource: DataSource) {}
 
-  /** The edition a query named. */
-  async edition(wanted: Edition): Promise<CatalogueEdition> {
+  /** The edition a query named, with coefficients for these sexes. */
+  async edition(wanted: Edition, sexes: readonly Sex[]): Promise<CatalogueEdition> {
     const isCurrent = (known: CatalogueEdition | null): known is CatalogueEdition =>
       known !== null && known.revision >= wanted.revision && known.ruleSet.version === wanted.ruleSetVersion
-    if (isCurrent(this.current)) return this.current
-    const loaded = await this.reload()
+    let edition = this.current
+    if (!isCurrent(edition)) edition = await this.reload()
     // A load that was already under way may have begun before the publication that was seen.
-    return isCurrent(loaded) ? loaded : this.reload()
+    if (!isCurrent(edition)) edition = await this.reload()
+    for (const sex of sexes) await this.complete(edition, sex)
+    return edition
   }
 
-  /** The edition that stands now. */
-  async latest(): Promise<CatalogueEdition> {
+  /** The edition that stands now, with coefficients for these sexes. */
+  async latest(sexes: readonly Sex[]): Promise<CatalogueEdition> {
     const [row]: [Edition] = await this.dataSource.query(`select ${EDITION_SQL}`)
-    return this.edition(row)
+    return this.edition(row, sexes)
   }
 
   private reload(): Promise<CatalogueEdition> {
@@ -117,28 +65,73 @@ export class Catalogue {
         `select ${EDITION_SQL}, (select rs.data from rule_sets rs where rs.is_active) as rules`,
       )
       if (state.ruleSetVersion === null) throw new AppError('unavailable', 'No rule set is active yet. Try again soon.')
-      const known = this.current?.rows ?? new Map<string, VersionRow>()
-      const listed: Array<{ id: string; versionId: string }> = await manager.query(
-        `select v.exercise_id as id, v.id as "versionId" from exercise_versions v where v.is_current order by v.name, v.exercise_id`,
-      )
-      const fresh = new Map<string, VersionRow>()
-      const missing = listed.filter(({ id, versionId }) => known.get(id)?.versionId !== versionId)
-      for (let at = 0; at < missing.length; at += BATCH) {
-        const rows: VersionRow[] = await manager.query(
-          `select v.exercise_id as id, v.id as "versionId", v.coordination, v.document, v.solutions
-             from exercise_versions v where v.id = any($1::uuid[])`,
-          [missing.slice(at, at + BATCH).map(({ versionId }) => versionId)],
-        )
-        for (const row of rows) fresh.set(row.id, row)
-      }
-      const entries = new Map<string, VersionRow>()
-      for (const { id } of listed) {
-        const row = fresh.get(id) ?? known.get(id)
-        if (row !== undefined) entries.set(id, row)
-      }
-      return new CatalogueEdition(state.revision, ruleSetSchema.parse(state.rules), entries)
+      const versions = await this.loadVersions(manager)
+      return new CatalogueEdition(state.revision, ruleSetSchema.parse(state.rules), versions)
     })
     this.current = edition
     return edition
+  }
+
+  /** The current versions by exercise; those that are known already are not read again. */
+  private async loadVersions(manager: EntityManager): Promise<Map<string, KeptVersion>> {
+    const listed: Array<{ id: string; versionId: string }> = await manager.query(
+      `select v.exercise_id as id, v.id as "versionId"
+         from exercise_versions v where v.is_current order by v.name, v.exercise_id`,
+    )
+    const versions = new Map<string, KeptVersion>()
+    for (const batch of inBatches(listed)) {
+      const known = batch.flatMap(({ id, versionId }) => {
+        const version = this.current?.versions.get(id)
+        return version?.versionId === versionId ? [version] : []
+      })
+      const missing = batch.filter(({ id }) => !known.some((version) => version.id === id))
+      const rows: Array<Omit<KeptVersion, 'document'> & { document: string }> =
+        missing.length === 0
+          ? []
+          : await manager.query(
+              `select v.exercise_id as id, v.id as "versionId", v.coordination, v.document::text as document
+                 from exercise_versions v where v.id = any($1::uuid[])`,
+              [missing.map(({ versionId }) => versionId)],
+            )
+      const read = rows.map((row) => ({ ...row, document: Buffer.from(row.document) }))
+      const byId = new Map([...known, ...read].map((version) => [version.id, version]))
+      for (const { id } of batch) {
+        const version = byId.get(id)
+        if (version !== undefined) versions.set(id, version)
+      }
+    }
+    return versions
+  }
+
+  /** Reads the coefficients an edition lacks for a sex, once however many ask. */
+  private async complete(edition: CatalogueEdition, sex: Sex): Promise<void> {
+    if (edition.has(sex)) return
+    const key = `${edition.revision} ${edition.ruleSet.version} ${sex}`
+    const work = this.packing.get(key) ?? this.pack(edition, sex).finally(() => this.packing.delete(key))
+    this.packing.set(key, work)
+    await work
+  }
+
+  private async pack(edition: CatalogueEdition, sex: Sex): Promise<void> {
+    const known = this.packed.get(sex)
+    const packed = new Map<string, PackedSolution>()
+    for (const batch of inBatches([...edition.versions.values()])) {
+      const missing = batch.filter(({ versionId }) => !known?.has(versionId)).map(({ versionId }) => versionId)
+      const rows: Array<{ versionId: string; solution: ExerciseSolution }> =
+        missing.length === 0
+          ? []
+          : await this.dataSource.query(
+              `select v.id as "versionId", v.solutions -> $2::text as solution
+                 from exercise_versions v where v.id = any($1::uuid[])`,
+              [missing, sex],
+            )
+      for (const { versionId, solution } of rows) packed.set(versionId, packSolution(solution))
+      for (const { versionId } of batch) {
+        const kept = known?.get(versionId)
+        if (kept !== undefined) packed.set(versionId, kept)
+      }
+    }
+    this.packed.set(sex, packed)
+    edition.add(sex, packed)
   }
 }

@@ -1,10 +1,8 @@
 import { z } from 'zod'
 import type { Exercise, Preview, listExercises, previewExercise } from '#shared/contract/exercise'
 import type { Received, ResponseOf } from '#shared/contract/endpoint'
-import type { RuleSet } from '#shared/contract/rule-set'
 import { solveExercise } from '#shared/mechanics/index'
 import {
-  averageAdult,
   capsFromSoreness,
   coordinationDemand,
   previewOf,
@@ -20,7 +18,7 @@ import { profileJson, toAthlete, type ProfileJson } from '../athletes/engine-ath
 import { recordAudit } from '../audit/record'
 import { requireAthlete } from '../people/access'
 import { standingSoreJson } from '../sore-joints/repository'
-import type { CatalogueEdition } from './catalogue'
+import type { CatalogueEdition } from './catalogue-edition'
 import { presentExercise } from './present'
 import { findExerciseBySlug, findExercises } from './repository'
 
@@ -32,7 +30,7 @@ export async function list(
 ): Promise<ResponseOf<typeof listExercises>> {
   const after = decodeCursor(query.cursor, cursorKey)
   const found = await findExercises(dataSource.manager, { ...query, after })
-  const edition = await catalogue.latest()
+  const edition = await catalogue.latest(['unspecified'])
   const { rows, nextCursor } = toPage(found, query.limit, (row) => [row.document.name, row.id])
   return { items: rows.map((row) => presentExercise(row, edition.musclesOf(row.id))), nextCursor }
 }
@@ -40,7 +38,7 @@ export async function list(
 export async function get({ dataSource, catalogue }: Dependencies, slug: string): Promise<Exercise> {
   const row = await findExerciseBySlug(dataSource.manager, slug)
   if (row === null) throw notFound('That exercise')
-  return presentExercise(row, (await catalogue.latest()).musclesOf(row.id))
+  return presentExercise(row, (await catalogue.latest(['unspecified'])).musclesOf(row.id))
 }
 
 interface Subject {
@@ -52,12 +50,9 @@ async function findSubject(
   { dataSource, clock }: Dependencies,
   actor: Actor,
   { athleteId, body }: Received<typeof previewExercise>['body'],
-  ruleSet: RuleSet,
 ): Promise<Subject> {
-  if (athleteId === undefined) {
-    const given = body ?? averageAdult('unspecified', ruleSet)
-    return { athlete: { factors: {}, skill: 'advanced', minor: false, ...given }, sore: [] }
-  }
+  if (body !== undefined) return { athlete: { factors: {}, skill: 'advanced', minor: false, ...body }, sore: [] }
+  if (athleteId === undefined) throw new Error('the contract lets no preview through without a body or an athlete')
   const { manager } = dataSource
   const access = await requireAthlete(manager, actor, athleteId)
   const [row]: Array<{ profile: ProfileJson | null; sore: SoreJointInput[] }> = await manager.query(
@@ -92,8 +87,8 @@ export async function preview(
   actor: Actor,
   body: Received<typeof previewExercise>['body'],
 ): Promise<Preview> {
-  const edition = await dependencies.catalogue.latest()
-  const { athlete, sore } = await findSubject(dependencies, actor, body, edition.ruleSet)
+  const { athlete, sore } = await findSubject(dependencies, actor, body)
+  const edition = await dependencies.catalogue.latest([athlete.sex])
   const movement = findMovement(body, athlete, edition)
   return previewOf(movement, athlete, body.load, capsFromSoreness(sore, edition.ruleSet), edition.ruleSet)
 }

@@ -1,6 +1,6 @@
 import { affectedBy, averageAdult, type Affected } from '#shared/rules/index'
 import { toAthlete } from '../athletes/engine-athlete'
-import type { CatalogueEdition } from '../exercises/catalogue'
+import type { CatalogueEdition } from '../exercises/catalogue-edition'
 import type { DayRow, SlotJson } from './repository'
 
 /**

@@ -20,7 +20,8 @@ export async function getDay(
   const [row] = await findDays(manager, [athleteId], day)
   if (row === undefined) throw notFound('That athlete')
   if (!access.self) await recordAudit(manager, { actor, action: 'read.today', subject: athleteId, details: { day } })
-  const affected = affectedSlots(row, await catalogue.edition(row), clock.now())
+  const edition = await catalogue.edition(row, [row.profile?.sex ?? 'unspecified'])
+  const affected = affectedSlots(row, edition, clock.now())
   return {
     athlete: { id: athleteId, name: access.name },
     day,

@@ -4,7 +4,7 @@ import type { Ranking } from '#shared/contract/swap'
 import { rank, type Athlete, type Candidate, type Place } from '#shared/rules/index'
 import { AppError, notFound } from '../../errors'
 import { toAthlete } from '../athletes/engine-athlete'
-import type { CatalogueEdition } from '../exercises/catalogue'
+import type { CatalogueEdition } from '../exercises/catalogue-edition'
 import { presentExerciseName } from '../exercises/present'
 import type { RankingInputs } from './ranking-inputs'
 

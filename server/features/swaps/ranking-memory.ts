@@ -21,7 +21,7 @@ export class RankingMemory {
     const key = fingerprintOf(inputs, filters, now)
     const known = this.tables.get(key)
     if (known !== undefined) return known
-    const edition = await this.catalogue.edition(inputs)
+    const edition = await this.catalogue.edition(inputs, [inputs.profile.sex])
     const made = Buffer.from(JSON.stringify(buildRanking(inputs, filters, edition, now)))
     this.tables.set(key, made)
     return made

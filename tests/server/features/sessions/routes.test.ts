@@ -17,7 +17,7 @@ const today = (athlete: { id: string }, day = '2026-03-02') => `/api/athletes/${
 const nameOf = (slug: TestSlug) => ({ id: training.exerciseId(slug), slug, name: training.document(slug).name })
 
 async function candidate(slug: TestSlug): Promise<Candidate> {
-  const edition = await app().dependencies.catalogue.latest()
+  const edition = await app().dependencies.catalogue.latest(['male'])
   const found = edition.find('male', training.exerciseId(slug))
   if (found === null) throw new Error(`${slug} is not in the catalogue`)
   return found
