@@ -24,6 +24,8 @@ async function main(): Promise<void> {
 }
 
 main().catch((error: unknown) => {
-  process.stderr.write(`The database could not be prepared: ${error instanceof Error ? error.message : String(error)}\n`)
+  process.stderr.write(
+    `The database could not be prepared: ${error instanceof Error ? error.message : String(error)}\n`,
+  )
   process.exit(1)
 })
