@@ -20,7 +20,8 @@ export const CLUBS = [QUARRY_LANE, SALTMARSH]
 const steps = (first: number, step: number, last: number): LoadSteps => ({ first, step, last })
 const DUMBBELLS_OUTDOORS = steps(4, 2, 28)
 const DUMBBELLS = steps(2, 2, 44)
-const BARBELL = steps(20, 2.5, 220)
+/** There is a light bar beside the usual one. */
+const BARBELL = steps(10, 2.5, 220)
 const PLATES = steps(1.25, 1.25, 60)
 const STACK = steps(5, 5, 100)
 const FINE_STACK = steps(2.5, 2.5, 60)

@@ -51,7 +51,7 @@ const BARS: Week = [
       plan('barbell-back-squat', 4, 5, 2, 'strength', 'quadriceps'),
       plan('romanian-deadlift', 3, 8, 2, 'size', 'hamstrings'),
       plan('dumbbell-split-squat', 3, 10, 2, 'size', 'quadriceps'),
-      plan('standing-calf-raise', 3, 15, 1, 'size', 'calves'),
+      plan('single-leg-calf-raise', 3, 15, 1, 'size', 'calves'),
     ],
   },
   {
@@ -112,8 +112,8 @@ const BARBELL: Week = [
       plan('barbell-back-squat', 4, 6, 2, 'strength', 'quadriceps'),
       plan('leg-press', 3, 10, 2, 'size', 'quadriceps'),
       plan('lying-leg-curl', 3, 12, 1, 'size', 'hamstrings'),
-      plan('knee-extension', 3, 12, 1, 'size', 'quadriceps'),
-      plan('standing-calf-raise', 3, 15, 1, 'size', 'calves'),
+      plan('knee-extension-machine', 3, 12, 1, 'size', 'quadriceps'),
+      plan('standing-calf-raise-machine', 3, 15, 1, 'size', 'calves'),
     ],
   },
   null,
@@ -123,7 +123,7 @@ const BARBELL: Week = [
     exercises: [
       plan('bench-press-barbell', 4, 6, 2, 'strength', 'chest'),
       plan('overhead-press-barbell', 3, 8, 2, 'strength', 'frontShoulder'),
-      plan('lateral-raise', 3, 15, 1, 'size', 'sideShoulder'),
+      plan('dumbbell-lateral-raise', 3, 15, 1, 'size', 'sideShoulder'),
       plan('cable-pushdown', 3, 12, 1, 'size', 'triceps'),
     ],
   },
@@ -142,7 +142,7 @@ const BARBELL: Week = [
     title: 'Deadlift day',
     minutes: 60,
     exercises: [
-      plan('deadlift', 3, 5, 2, 'strength', 'glutes'),
+      plan('barbell-deadlift', 3, 5, 2, 'strength', 'glutes'),
       plan('dumbbell-split-squat', 3, 10, 2, 'size', 'quadriceps'),
       plan('back-extension', 3, 12, 2, 'size', 'lowerBack'),
     ],
