@@ -25,10 +25,14 @@ export interface Drawing {
 
 /** Room around everything for strokes, discs and rings. */
 const MARGIN = 4
+/** What bears higher than this above the floor stands on something. */
+const STEP = 0.025
+/** A back lower than this lies on the floor itself. */
+const LOW = 0.12
 /** How far above the athlete's highest point a cable is followed. */
 const CABLE_ROOM = 0.2
 
-const lowest = (pose: Pose): number => Math.min(...Object.values(pose).map((place) => place[2]))
+const lowestOf = (pose: Pose): number => Math.min(...Object.values(pose).map((place) => place[2]))
 
 const STANDING: readonly Support[] = ['feet', 'offFoot', 'knees', 'forearms']
 
@@ -60,7 +64,7 @@ function floorOf(
   frames: readonly SolvedFrame[],
   places: readonly Vector[],
 ): number | null {
-  const bottom = Math.min(...frames.map(({ pose }) => lowest(pose)))
+  const bottom = Math.min(...frames.map(({ pose }) => lowestOf(pose)))
   if (places.length > 0) {
     const least = Math.min(...places.map((place) => place[2]))
     // A heel that drops below the ball of the foot needs a step under the ball, not a hole in the floor.
@@ -79,7 +83,7 @@ function groundShapes(
   floor: number,
 ): Shape[] {
   const shapes: Shape[] = []
-  const high = places.filter((place) => place[2] > floor + 0.06)
+  const high = places.filter((place) => place[2] > floor + STEP)
   const groups = new Map<string, Vector[]>()
   for (const place of high) {
     const key = `${Math.round(place[2] * 8)} ${Math.round(place[0] * 3)}`
@@ -102,18 +106,20 @@ function groundShapes(
     )
   }
   const against = upperBackOn(mechanics, frames[0]!.pose)
-  if (against === 'bench' || against === 'wall') {
-    const contacts = frames.map(({ pose }) => upperBackContact(pose))
-    const top = Math.min(...contacts.map((place) => place[2]))
+  const contacts = against === null ? [] : frames.map(({ pose }) => upperBackContact(pose))
+  const lowest = Math.min(...contacts.map((place) => place[2]))
+  if (against === 'wall' || (against === 'bench' && lowest > floor + LOW)) {
     const x = contacts.reduce((sum, place) => sum + place[0], 0) / contacts.length
     const away = frames[0]!.pose['right.ankle'][0] > x ? -1 : 1
     shapes.push(
-      against === 'wall' ? wall(view, [x, 0, 0], floor) : standOn(view, [x + away * 0.07, 0, 0], top, floor, 0.1, 0.22),
+      against === 'wall'
+        ? wall(view, [x, 0, 0], floor)
+        : standOn(view, [x + away * 0.07, 0, 0], lowest, floor, 0.1, 0.22),
     )
   }
   const padded = bearsOn(mechanics, 'seat', 'backPad', 'chestPad')
   const resting = padded || places.length === 0 ? frames.flatMap(({ pose }) => [pose.pelvis, pose.lumbar]) : []
-  const xs = [...places, ...resting].map((place) => place[0])
+  const xs = [...places, ...contacts, ...resting].map((place) => place[0])
   const [from, to] = [Math.min(...xs) - 0.16, Math.max(...xs) + 0.16]
   shapes.push(
     block(
@@ -141,7 +147,7 @@ export function drawExercise(mechanics: ExerciseMechanics, frames: readonly Solv
   const drawn = frames.map((frame): DrawnFrame => {
     const shapes = [
       ...ground,
-      ...padShapes(view, mechanics, frame.pose, floor ?? lowest(frame.pose) - 0.04),
+      ...padShapes(view, mechanics, frame.pose, floor ?? lowestOf(frame.pose) - 0.04),
       ...bearingHandShapes(view, mechanics, frame.pose, floor),
       ...bodyShapes(view, frame.pose, handsLieFlat(mechanics)),
       ...loadShapes(view, mechanics, frame, ceiling),

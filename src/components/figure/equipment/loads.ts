@@ -109,6 +109,14 @@ function pressing(view: View, use: Application, skin: number): Shape[] {
   ]
 }
 
+/** Weight at the hips of a body-weight exercise: hung from a belt, or laid on the hips of someone who lies on their back. */
+function hipWeight(view: View, pose: Pose, direction: Vector): Shape[] {
+  const { forward } = pelvisAxes(pose)
+  const front = add(pose.pelvis, scale(forward, 0.07))
+  if (forward[2] > 0.5) return [...restingPlate(view, front, forward), ...arrow(view, front, direction, 0.2)]
+  return [...beltPlate(view, pose.pelvis, forward), ...arrow(view, front, direction, 0.3)]
+}
+
 /** Pads over the shoulders of a sled or calf machine. */
 function shoulderPads(view: View, pose: Pose): Shape[] {
   const { up, forward } = chestAxes(pose)
@@ -125,10 +133,14 @@ function shoulderPads(view: View, pose: Pose): Shape[] {
   })
 }
 
-/** The plate of a leg press under both soles. */
-function footplate(view: View, pose: Pose, direction: Vector): Shape[] {
-  const sole = between(middleOf(pose, 'heel'), middleOf(pose, 'toe'), 0.5)
-  const along = unit(subtract(middleOf(pose, 'toe'), middleOf(pose, 'heel')))
+/** The plate of a leg press under the soles that push it. */
+function footplate(view: View, mechanics: ExerciseMechanics, pose: Pose, direction: Vector): Shape[] {
+  const [heel, toe] =
+    mechanics.sides === 'both'
+      ? [middleOf(pose, 'heel'), middleOf(pose, 'toe')]
+      : [pose['right.heel'], pose['right.toe']]
+  const sole = between(heel, toe, 0.5)
+  const along = unit(subtract(toe, heel))
   const below: Vector = [along[2], 0, -along[0]]
   const middle = add(sole, scale(below, 0.014))
   return [
@@ -151,15 +163,12 @@ function carried(view: View, mechanics: ExerciseMechanics, pose: Pose, use: Appl
       return [...shoulderPads(view, pose), ...arrow(view, add(at, scale(direction, -0.2)), direction, 0.13)]
     case 'hips':
       if (free) return [...barbell(view, at), ...arrow(view, at, direction, 0.2)]
-      return [
-        ...beltPlate(view, pose.pelvis, pelvisAxes(pose).forward),
-        ...arrow(view, add(pose.pelvis, scale(pelvisAxes(pose).forward, 0.07)), direction, 0.3),
-      ]
+      return hipWeight(view, pose, direction)
     case 'head':
       return [...headLoad(view, at), ...arrow(view, at, direction, 0.15)]
     case 'feet':
       if (use.side === 'left') return []
-      return kind === 'pad' ? footplate(view, pose, direction) : arrow(view, at, direction, 0.15)
+      return kind === 'pad' ? footplate(view, mechanics, pose, direction) : arrow(view, at, direction, 0.15)
     case 'upperArm':
       return pressing(view, use, SKIN.upperArm - 0.006)
     case 'forearm':

@@ -1,8 +1,8 @@
 import type { ExerciseMechanics } from '#shared/mechanics/definition'
 import type { Pose, Vector } from '#shared/mechanics/solution'
 import type { Side } from '#shared/mechanics/vocabulary'
-import { chestAxes, LEFTWARD } from '../body'
-import { add, between, cross, length, scale, subtract, unit } from '../geometry'
+import { chestAxes, LEFTWARD, pelvisAxes } from '../body'
+import { add, between, length, scale, subtract, unit } from '../geometry'
 import type { Shape } from '../scene'
 import { block, rod } from '../solids'
 import type { View } from '../view'
@@ -28,12 +28,12 @@ function post(view: View, from: Vector, floor: number): Shape[] {
   return from[2] - floor > 0.07 ? [rod(view, 'iron', from, [from[0], from[1], floor], 0.012, BEHIND - 1)] : []
 }
 
-/** Upright trunks sit on the seat; the seat reaches forward under the thighs. */
+/** The seat stands square to a trunk that leans back, level under one that sits up or bends forward. */
 function seat(view: View, pose: Pose, floor: number): Shape[] {
-  const thigh = unit(subtract(pose['right.knee'], pose['right.hip']))
-  const along: Vector = unit([thigh[0], 0, thigh[2] * 0.5], [1, 0, 0])
-  const out: Vector = unit(cross(along, [0, 1, 0]))
-  const up: Vector = out[2] < 0 ? scale(out, -1) : out
+  const axes = pelvisAxes(pose)
+  const reclined = axes.up[0] < 0
+  const along: Vector = reclined ? axes.forward : [1, 0, 0]
+  const up: Vector = reclined ? axes.up : [0, 0, 1]
   const under = subtract(pose.pelvis, scale(up, SKIN.buttock - 0.012))
   const middle = add(under, scale(along, 0.07))
   return [pad(view, middle, along, up, 0.13, 0.1), ...post(view, subtract(middle, scale(up, 2 * THICK)), floor)]
@@ -133,6 +133,10 @@ export function roller(view: View, face: Vector, out: Vector, wide = 0.045, laye
   return rod(view, 'pad', add(centre, scale(LEFTWARD, wide)), subtract(centre, scale(LEFTWARD, wide)), 0.026, layer)
 }
 
+/** Held shins with nothing else to bear on mean kneeling, too. */
+const kneels = (mechanics: ExerciseMechanics): boolean =>
+  bearsOn(mechanics, 'knees') || (bearsOn(mechanics, 'shankPad') && !bearsOn(mechanics, 'thighPad', 'seat', 'feet'))
+
 /** Where each bearing that stands on the floor or on a box touches it. */
 export function bearings(mechanics: ExerciseMechanics, pose: Pose): Vector[] {
   const places: Vector[] = []
@@ -146,7 +150,7 @@ export function bearings(mechanics: ExerciseMechanics, pose: Pose): Vector[] {
       : workingSides(mechanics))
       places.push(foot(side))
   if (bearsOn(mechanics, 'offFoot')) places.push(foot(IDLE))
-  if (bearsOn(mechanics, 'knees')) for (const side of BOTH) places.push(add(pose[`${side}.knee`], [0, 0, -0.02]))
+  if (kneels(mechanics)) for (const side of BOTH) places.push(add(pose[`${side}.knee`], [0, 0, -0.02]))
   if (bearsOn(mechanics, 'forearms'))
     for (const side of BOTH) places.push(between(pose[`${side}.elbow`], pose[`${side}.wrist`], 0.2))
   return places
