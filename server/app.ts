@@ -1,4 +1,5 @@
 import { randomUUID } from 'node:crypto'
+import compression from 'compression'
 import cookieParser from 'cookie-parser'
 import express, { type Express, type Router } from 'express'
 import helmet from 'helmet'
@@ -78,6 +79,9 @@ export function createApp(
       referrerPolicy: { policy: 'no-referrer' },
     }),
   )
+  // Athletes read this in places with bad reception. No answer holds a secret beside something the caller chose, which
+  // compressing could give away.
+  app.use(compression())
   app.use('/api', (request, response, next) => {
     // Answers hold health data: no cache may keep them.
     response.setHeader('Cache-Control', 'no-store')

@@ -13,6 +13,7 @@ mkdirSync(join(clientDir, 'assets'))
 writeFileSync(join(clientDir, 'index.html'), '<!doctype html><title>Pintle</title>')
 writeFileSync(join(clientDir, 'favicon.svg'), '<svg xmlns="http://www.w3.org/2000/svg"/>')
 writeFileSync(join(clientDir, 'assets', 'main-abc123.js'), 'export {}')
+writeFileSync(join(clientDir, 'assets', 'large-abc123.js'), 'export {}\n'.repeat(1000))
 
 const app = testApp({ CLIENT_DIR: clientDir })
 const json = (path: string, text: string) =>
@@ -212,6 +213,16 @@ describe('the built client', () => {
     const asset = await request(app().app).get('/assets/main-abc123.js').expect(200)
     expect(asset.headers['cache-control']).toBe('public, max-age=31536000, immutable')
     expectError(await request(app().app).get('/assets/old-file.js'), 'not_found')
+  })
+
+  it('and the API are sent compressed to whoever can read that', async () => {
+    for (const path of ['/assets/large-abc123.js', '/api/openapi.json']) {
+      const plain = await request(app().app).get(path).set('Accept-Encoding', 'identity').expect(200)
+      const packed = await request(app().app).get(path).set('Accept-Encoding', 'gzip').expect(200)
+      expect(plain.headers['content-encoding']).toBeUndefined()
+      expect(packed.headers).toMatchObject({ 'content-encoding': 'gzip', vary: 'Accept-Encoding' })
+      expect(packed.text).toBe(plain.text)
+    }
   })
 
   it('does not serve files from outside its folder', async () => {
