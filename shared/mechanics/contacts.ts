@@ -1,6 +1,5 @@
 import type { LimbIndex, SegmentRef } from './bodies'
 import type { ExerciseMechanics } from './definition'
-import { MechanicsError } from './errors'
 import type { SolvedLeg } from './leg'
 import type { Posture } from './posture'
 import type { Vector } from './solution'
@@ -8,7 +7,7 @@ import { between, mean, unit } from './vector'
 import type { Support } from './vocabulary'
 
 /** Supports whose reaction statics can find; all others only hold what rests on them. */
-const SOLVABLE: readonly Support[] = [
+export const SOLVABLE: readonly Support[] = [
   'handsHanging',
   'handsPushing',
   'forearms',
@@ -48,8 +47,8 @@ export interface ContactGroup {
 const MID_FOOT = 0.45
 /** Ball of the foot, share of its length from the heel (from memory, medium). */
 const BALL = 0.78
-/** A sole steeper than this stands on the ball or the heel. */
-const STEEP = 25
+/** A sole steeper than this (degrees) stands on the ball or the heel. */
+export const STEEP = 25
 /** Where along the forearm a plank bears, from the elbow (our estimate). */
 const FOREARM_BEARING = 0.2
 /** Where along the upper trunk a bench edge bears, from L5/S1 (the lower shoulder blade; our estimate). */
@@ -105,6 +104,8 @@ const BEARING_SEGMENT = {
 /** Which limbs of a support bear: both, unless the exercise is one-sided and the idle limb has a posture of its own. */
 function bearingLimbs(mechanics: ExerciseMechanics, support: Support): LimbIndex[] {
   if (support === 'offHand' || support === 'offFoot') return [1]
+  // One back, one place.
+  if (support === 'upperBack') return [0]
   if (mechanics.sides === 'both') return [0, 1]
   const hands = support === 'handsHanging' || support === 'handsPushing' || support === 'forearms'
   if (hands) return [0]
@@ -115,17 +116,9 @@ function bearingLimbs(mechanics: ExerciseMechanics, support: Support): LimbIndex
 /**
  * The contacts whose reactions statics must find; empty when the body rests on a seat or pad.
  * @param weightLine x of the centre of body and reference load
- * @throws MechanicsError unsupported_combination with more than two groups of contacts
  */
 export function contactGroups(mechanics: ExerciseMechanics, posture: Posture, weightLine: number): ContactGroup[] {
   if (rests(mechanics)) return []
-  if (mechanics.supports.length > 2) {
-    throw new MechanicsError(
-      'unsupported_combination',
-      'supports',
-      'Statics can share weight between two supports at most.',
-    )
-  }
   return mechanics.supports.map((support): ContactGroup => {
     const contacts = bearingLimbs(mechanics, support).map((limb): Contact => {
       const arm = posture.arms[limb]

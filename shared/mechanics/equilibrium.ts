@@ -31,29 +31,32 @@ function onGroup(group: ContactGroup, total: Vector, couple: Vector): Force[] {
 /** The middle of a group's contacts. */
 export const groupCentre = (group: ContactGroup): Vector => mean(group.contacts.map((contact) => contact.at))
 
+/** Moment of a unit push of the first group about the second's centre, around the lateral axis (stature fractions). */
+export const leverOf = (first: ContactGroup, second: ContactGroup): number =>
+  cross(subtract(groupCentre(first), groupCentre(second)), first.push)[1]
+
 /**
  * Support reactions that hold the given forces, linear in them.
  *
  * One group takes the whole force and, as a couple, the offset of the pressure centre from its contact. Of two groups
  * the first takes a force of known direction (upright, inward, or square to the trunk), sized so that moments
  * in the sagittal plane balance; everything else goes to the second. No group: the body rests on pads and nothing is solved.
+ *
+ * @returns for each group its contacts' forces, in their order
  */
-export function reactions(groups: readonly ContactGroup[], applied: readonly Force[]): Force[] {
+export function reactions(groups: readonly ContactGroup[], applied: readonly Force[]): Force[][] {
   const [first, second] = groups
   if (first === undefined) return []
   if (second === undefined) {
     const centre = groupCentre(first)
     const { force, moment } = wrench(applied, centre)
-    return onGroup(first, scale(force, -1), scale(moment, -1))
+    return [onGroup(first, scale(force, -1), scale(moment, -1))]
   }
-  const a = groupCentre(first)
   const b = groupCentre(second)
   const about = wrench(applied, b)
-  // Moment of a unit force at a about b, around the lateral axis.
-  const lever = cross(subtract(a, b), first.push)[1]
-  const onFirst = onGroup(first, scale(first.push, -about.moment[1] / lever), ZERO)
+  const onFirst = onGroup(first, scale(first.push, -about.moment[1] / leverOf(first, second)), ZERO)
   const rest = wrench([...applied, ...onFirst], b)
-  return [...onFirst, ...onGroup(second, scale(rest.force, -1), scale(rest.moment, -1))]
+  return [onFirst, onGroup(second, scale(rest.force, -1), scale(rest.moment, -1))]
 }
 
 /**

@@ -11,8 +11,12 @@ import type { Action } from './vocabulary'
 /** Below this share of body weight × stature a moment is rounding, not work. */
 const NEGLIGIBLE = 1e-12
 
-/** One set of forces in equilibrium (gravity, or the load), with its reactions. */
-export type ForceSet = readonly Force[]
+/** One set of forces (gravity, or the load) in equilibrium: the segments' own weights, and what acts from outside. */
+export interface ForceSet {
+  weights: readonly Force[]
+  external: readonly Force[]
+}
+const allOf = ({ weights, external }: ForceSet): Force[] => [...weights, ...external]
 
 const ALL_SEGMENTS: SegmentRef[] = SEGMENT_NAMES.flatMap((name): SegmentRef[] =>
   name === 'pelvis' || name === 'upperTrunk' || name === 'head'
@@ -81,7 +85,10 @@ function cutsOf(mechanics: ExerciseMechanics, posture: Posture): Cut[] {
         read: [
           {
             axis: 'elbow',
-            direction: arm.hingeAcross ? unit(cross(armAxis, forearm)) : scale(armAxis, arm.elbowSign),
+            // Flexing an elbow that lies across carries both hands to the same side of their planes: mirror images.
+            direction: arm.hingeAcross
+              ? scale(unit(cross(armAxis, forearm)), limb === 0 ? 1 : -1)
+              : scale(armAxis, arm.elbowSign),
             kind: 'moment',
           },
         ],
@@ -125,10 +132,11 @@ export function jointTerms(
   restsOn: (segment: SegmentRef) => boolean,
 ): Term[] {
   const terms: Term[] = []
+  const [bodyForces, loadForces] = [allOf(sets.body), allOf(sets.load)]
   for (const cut of cutsOf(mechanics, posture)) {
     const mirrored = mechanics.sides === 'both' && cut.limb !== undefined
-    const body = cutWrench(sets.body, restsOn, ALL_SEGMENTS, { ...cut, mirrored })
-    const load = cutWrench(sets.load, restsOn, ALL_SEGMENTS, { ...cut, mirrored })
+    const body = cutWrench(bodyForces, restsOn, ALL_SEGMENTS, { ...cut, mirrored })
+    const load = cutWrench(loadForces, restsOn, ALL_SEGMENTS, { ...cut, mirrored })
     if (!body || !load) continue
     for (const { axis, direction, kind } of cut.read) {
       if (kind === 'moment' && cut.name === 'lumbar' && flatBack(mechanics)) continue
@@ -164,8 +172,8 @@ function gripTerms(
     const frame = posture.frame
     if ((limb === 1 ? (frame.offArm ?? frame.arms) : frame.arms).flat !== undefined) continue
     const onHand = (set: ForceSet) =>
-      set
-        .filter((force) => force.segment.name === 'hand' && force.segment.limb === limb && force.at === arm.grip)
+      set.external
+        .filter(({ segment }) => segment.name === 'hand' && segment.limb === limb)
         .reduce<Vector>((sum, force) => add(sum, force.force), [0, 0, 0])
     const body = onHand(sets.body)
     const load = onHand(sets.load)
@@ -198,7 +206,9 @@ export function addDirectMoments(mechanics: ExerciseMechanics, frameIndex: numbe
     const b = (sign * moment.arm * (moment.ratio ?? 1) * (moment.curve?.[frameIndex] ?? 1)) / sides
     const role = middle ? 'middle' : 'working'
     const standing = result.find((term) => term.axis === axis && term.role === role)
-    if (standing) standing.b += b
+    // Where both ways count as one action (leaning or turning the trunk), the machine adds to what is there.
+    const same = AXES[axis][0] === AXES[axis][1] && standing && (standing.b || standing.a) < 0 ? -1 : 1
+    if (standing) standing.b += same * b
     else result.push({ axis, role, a: 0, b })
   }
   return result

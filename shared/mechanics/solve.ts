@@ -1,9 +1,9 @@
 import { solveBalance } from './balance'
 import { roleOf } from './bodies'
+import { checkDefinition, checkNumbers } from './check'
 import { restingSegments } from './contacts'
 import type { ExerciseMechanics } from './definition'
 import { reactions } from './equilibrium'
-import { MechanicsError } from './errors'
 import { loadForces } from './loads'
 import { addDirectMoments, jointTerms } from './moments'
 import type { Posture } from './posture'
@@ -24,35 +24,30 @@ const CLEARANCE = 0.04
  * @throws MechanicsError with the offending field when the posture cannot be reached, balanced or held
  */
 export function solveExercise(mechanics: ExerciseMechanics, sex: Sex): ExerciseSolution {
-  checkShape(mechanics)
+  checkDefinition(mechanics)
   const table = SEGMENTS[sex]
   const restsOn = restingSegments(mechanics)
   const frames = mechanics.frames.map((frame, index): SolvedFrame & { anchor: Vector } => {
     const { posture, groups, body, load } = solveBalance(mechanics, frame, table, `frames.${index}`)
     const bodyReactions = reactions(groups, body)
     const loadReactions = reactions(groups, load)
-    const terms = addDirectMoments(
-      mechanics,
-      index,
-      jointTerms(mechanics, posture, { body: [...body, ...bodyReactions], load: [...load, ...loadReactions] }, restsOn),
-    )
-    for (const term of terms) {
-      if (!Number.isFinite(term.a) || !Number.isFinite(term.b)) {
-        throw new MechanicsError('bad_number', `frames.${index}`, `The ${term.axis} moment has no finite value here.`)
-      }
+    const sets = {
+      body: { weights: body, external: bodyReactions.flat() },
+      load: { weights: [], external: [...load, ...loadReactions.flat()] },
     }
-    const supported: Reaction[] = groups.flatMap((group) =>
-      group.contacts.map((contact) => ({
+    const terms = addDirectMoments(mechanics, index, jointTerms(mechanics, posture, sets, restsOn))
+    const supported: Reaction[] = groups.flatMap((group, g) =>
+      group.contacts.map((contact, c) => ({
         support: contact.support,
         role: roleOf(contact.segment.limb),
         at: contact.at,
-        a: bodyReactions.find((force) => force.at === contact.at)?.force[2] ?? 0,
-        b: loadReactions.find((force) => force.at === contact.at)?.force[2] ?? 0,
+        a: bodyReactions[g]![c]!.force[2],
+        b: loadReactions[g]![c]!.force[2],
       })),
     )
     const [arm] = posture.arms
     const [leg] = posture.legs
-    return {
+    const solved = {
       name: frame.name,
       pose: poseOf(posture),
       angles: {
@@ -65,20 +60,12 @@ export function solveExercise(mechanics: ExerciseMechanics, sex: Sex): ExerciseS
       terms,
       reactions: supported,
       loadLines: loadForces(mechanics, posture).lines,
-      anchor: anchorOf(supported),
+      anchor: anchorOf(mechanics, supported, posture),
     }
+    checkNumbers(solved, `frames.${index}`, 'This posture or load has no finite solution.')
+    return solved
   })
   return { frames: ground(mechanics, frames) }
-}
-
-function checkShape(mechanics: ExerciseMechanics): void {
-  const count = mechanics.frames.length
-  if (count < 2 || count > 4) throw new MechanicsError('wrong_frame_count', 'frames', 'Give two to four postures.')
-  mechanics.moments?.forEach((moment, index) => {
-    if (moment.curve && moment.curve.length !== count) {
-      throw new MechanicsError('wrong_curve_length', `moments.${index}.curve`, `Give one factor per posture: ${count}.`)
-    }
-  })
 }
 
 function poseOf(posture: Posture): Pose {
@@ -113,11 +100,17 @@ function poseOf(posture: Posture): Pose {
   }
 }
 
-/** The point that stays put through the repetition: what bears on the ground or a bar, or else the pelvis on its seat. */
-function anchorOf(supported: readonly Reaction[]): Vector {
+/**
+ * The point that stays put through the repetition: what bears on the ground or a bar, or else the knee of a held shank, or
+ * the pelvis on its seat.
+ */
+function anchorOf(mechanics: ExerciseMechanics, supported: readonly Reaction[], posture: Posture): Vector {
   const onGround = [...supported].reverse().find((reaction) => reaction.support !== 'handsHanging')
   const bearing = onGround ?? supported[0]
-  if (!bearing) return [0, 0, 0]
+  if (!bearing) {
+    const kneels = mechanics.supports.every((support) => support === 'shankPad' || support === 'feet')
+    return kneels ? [posture.legs[0].knee[0], 0, posture.legs[0].knee[2]] : [0, 0, 0]
+  }
   return [bearing.at[0], 0, bearing.at[2]]
 }
 

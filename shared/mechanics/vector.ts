@@ -15,7 +15,7 @@ export const length = (a: Vector): number => Math.hypot(a[0], a[1], a[2])
 /** Unit vector along `a`; the zero vector stays zero. */
 export const unit = (a: Vector): Vector => {
   const size = length(a)
-  return size === 0 ? ZERO : scale(a, 1 / size)
+  return size === 0 ? ZERO : [a[0] / size, a[1] / size, a[2] / size]
 }
 export const mean = (vectors: readonly Vector[]): Vector => scale(vectors.reduce(add, ZERO), 1 / vectors.length)
 /** Point a share `t` of the way from `a` to `b`. */
