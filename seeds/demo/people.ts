@@ -62,12 +62,17 @@ export const STAFF = [ADMIN, YARD_COACH, ROOM_COACH, PHYSIO]
 type Usual = 'place' | 'consents' | 'legs' | 'trained' | 'loads'
 type Details = Omit<DemoAthlete, keyof DemoPerson | Usual> & Partial<Pick<DemoAthlete, Usual>>
 
-/** Years of pull-ups show in what pulls the arms down. */
-const PULLERS = { shoulderAdduction: 1.2 }
+/** Years of the same work show where it was done. */
+const TRAINED: Record<DemoAthlete['programme'], DemoAthlete['trained']> = {
+  bars: { shoulderAdduction: 1.2, trunkExtension: 1.3 },
+  barsBeginner: {},
+  barbell: { trunkExtension: 1.5 },
+  barbellBeginner: {},
+}
 
 function athlete(name: string, clubs: DemoClub[], details: Details): DemoAthlete {
   const place = clubs.includes(QUARRY_LANE) ? YARD : ROOM
-  const trained = details.programme === 'bars' ? PULLERS : {}
+  const trained = TRAINED[details.programme]
   return { ...person(name, 'athlete', clubs), place, consents: true, legs: 1, trained, loads: {}, ...details }
 }
 

@@ -72,7 +72,7 @@ const BARS: Week = [
       plan('chin-up', 4, 5, 2, 'strength', 'lats'),
       plan('inverted-row-rings', 3, 12, 2, 'size', 'upperBack'),
       plan('barbell-curl', 3, 10, 1, 'size', 'biceps'),
-      plan('wrist-curl', 3, 15, 1, 'endurance', 'forearms'),
+      plan('dead-hang', 3, 30, 2, 'endurance', 'forearms'),
     ],
   },
   null,

@@ -57,7 +57,9 @@ export function demoStrength(edition: CatalogueEdition): Strength {
   const known = new Map<string, number>()
   const workingLoadOf = (athlete: DemoAthlete, candidate: Candidate, { slug, count, rir }: PlannedExercise): number => {
     const key = [athlete.name, slug, count, rir].join(' ')
-    const intensity = 1 / (1 + (count + rir) / edition.ruleSet.dose.epley.value)
+    const { epley, secondsPerRepetition } = edition.ruleSet.dose
+    const repetitions = candidate.document.unit === 'seconds' ? count / secondsPerRepetition.value : count
+    const intensity = 1 / (1 + (repetitions + rir) / epley.value)
     const load = known.get(key) ?? heaviestAtDemand(candidate, toEngineAthlete(athlete), intensity, edition)
     known.set(key, load)
     return load
