@@ -25,7 +25,8 @@ export interface Drawing {
 
 /** Room around everything for strokes, discs and rings. */
 const MARGIN = 4
-/** What bears higher than this above the floor stands on something. */
+/** What bears higher than this above the floor stands on something; less for the ball of a foot whose heel drops. */
+const RAISED = 0.06
 const STEP = 0.025
 /** A back lower than this lies on the floor itself. */
 const LOW = 0.12
@@ -36,17 +37,26 @@ const lowestOf = (pose: Pose): number => Math.min(...Object.values(pose).map((pl
 
 const STANDING: readonly Support[] = ['feet', 'offFoot', 'knees', 'forearms']
 
+/** Whether a heel sinks below the ball of the foot, which needs a step. */
+const dropsHeel = (frames: readonly SolvedFrame[]): boolean =>
+  frames.some(({ pose, reactions }) =>
+    reactions.some(({ support, at }) => support === 'feet' && pose['right.heel'][2] < at[2] - 0.015),
+  )
+
 /** Where the body touches what it stands on, over all frames; soles on a machine's plate are not on the floor. */
 function standingPlaces(mechanics: ExerciseMechanics, frames: readonly SolvedFrame[]): Vector[] {
   const onPlate = mechanics.loads.some(({ at, direction }) => at === 'feet' && typeof direction === 'object')
+  const onStep = dropsHeel(frames)
   return frames.flatMap(({ pose, reactions }) => {
     const solved = reactions.filter(({ support }) => STANDING.includes(support))
-    // Reactions are given at the bone; the skin of a knee or forearm reaches a little lower.
-    const feet = solved.map(({ support, at }): Vector => [
-      at[0],
-      at[1],
-      at[2] - (support in SKIN_BELOW ? SKIN_BELOW[support]! : 0),
-    ])
+    const feet = solved.map(({ support, role, at }): Vector => {
+      // Reactions are given at the bone; the skin of a knee or forearm reaches a little lower.
+      const skin = at[2] - (SKIN_BELOW[support] ?? 0)
+      if (onStep || (support !== 'feet' && support !== 'offFoot')) return [at[0], at[1], skin]
+      // Up on the ball of the foot the toes reach lower still: they are what stands on the floor.
+      const side = role === 'idle' || at[1] > 0 ? 'left' : 'right'
+      return [at[0], at[1], Math.min(skin, pose[`${side}.toe`][2])]
+    })
     const standing = onPlate ? [] : feet.length > 0 ? feet : bearings(mechanics, pose)
     const idleHand = bearsOn(mechanics, 'offHand') ? [subtract(pose['left.grip'], [0, 0, 0.02])] : []
     return [
@@ -83,7 +93,7 @@ function groundShapes(
   floor: number,
 ): Shape[] {
   const shapes: Shape[] = []
-  const high = places.filter((place) => place[2] > floor + STEP)
+  const high = places.filter((place) => place[2] > floor + (dropsHeel(frames) ? STEP : RAISED))
   const groups = new Map<string, Vector[]>()
   for (const place of high) {
     const key = `${Math.round(place[2] * 8)} ${Math.round(place[0] * 3)}`

@@ -68,7 +68,7 @@ function held(
       ? [barThrough(view, pose, sides, 0.06, 0.05)]
       : sides.map((side) => handle(view, pose, side, mechanics))
   const arrows =
-    oneBar || (free && shared)
+    (oneBar && (free || mechanics.guidance === 'fixedPath')) || (free && shared)
       ? arrow(view, middleOf(pose, 'grip'), direction, 0.2)
       : uses.slice(0, view.turn < 25 ? 1 : 2).flatMap((use) => arrow(view, use.line.at, use.line.direction, 0.17))
   return [...implement, ...arrows]
