@@ -18,4 +18,4 @@ CLIENT_PORT=$(free_port 5173) || fail "There is no free port from 5173 up."
 export PORT PUBLIC_URL
 npx --no-install tsx server/database/seed.ts || fail "The database could not be prepared: see the lines above."
 exec npx --no-install concurrently --kill-others --names server,client --prefix-colors blue,green \
-  "tsx watch --clear-screen=false --include 'seeds/**/*' server/main.ts" "vite --port $CLIENT_PORT --clearScreen false"
+  "tsx watch --clear-screen=false server/main.ts" "vite --port $CLIENT_PORT --clearScreen false"
