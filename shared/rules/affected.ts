@@ -1,7 +1,7 @@
 import type { RuleSet } from '../contract/rule-set'
 import type { Dose, Slot } from '../contract/session'
 import { capsFromSoreness, isRedFlagged } from './caps'
-import { isOver, tightestBySide } from './joint-stress'
+import { capTable, isOver, stressOf, tightestBySide } from './joint-stress'
 import { planned, prepare } from './original'
 import type { Athlete, Candidate, SoreJointInput } from './types'
 
@@ -28,11 +28,11 @@ export function affectedBy(
     .flatMap((report): Affected[] => {
       const { joint, side, soreJointId } = report
       if (isRedFlagged(report, ruleSet)) {
-        const stress = tightestBySide(joint, strains, [], load)[0]?.stress ?? 0
+        const stress = stressOf(joint, strains, load).stress
         if (stress < ruleSet.caps.loadedFrom.value && !stopsAll(report, ruleSet)) return []
         return [{ joint, side, stress, cap: 0, verdict: 'redFlag', soreJointId }]
       }
-      const own = capsFromSoreness([report], ruleSet)
+      const own = capTable(capsFromSoreness([report], ruleSet))
       const worst = tightestBySide(joint, strains, own, load)[0]
       if (!worst || !isOver(worst)) return []
       return [{ joint, side, stress: worst.stress, cap: worst.cap, verdict: 'overCap', soreJointId }]

@@ -1,25 +1,30 @@
 import type { RuleSet } from '../contract/rule-set'
-import { ACTIONS, ACTION_JOINT, type Action, type Joint } from '../mechanics/vocabulary'
+import { ACTIONS, ACTION_JOINT, JOINTS, type Joint } from '../mechanics/vocabulary'
 import { stopsAll } from './affected'
 import { capsFromSoreness, isRedFlagged } from './caps'
-import { tightestBySide } from './joint-stress'
+import { capTable, stressOf, type CapTable } from './joint-stress'
 import { groupDrive, groupRoleIn } from './muscles'
 import { planned, prepare, type Planned } from './original'
 import { muscleLoads } from './score'
-import { strengths } from './strength'
-import type { Cap, RankRequest, SoreJointInput } from './types'
+import { strengthTables, type StrengthTables } from './strength'
+import type { RankRequest, SoreJointInput } from './types'
+
+/** Joints that every row shows. */
+const ALWAYS: readonly Joint[] = ['elbow', 'wrist', 'lowerBack']
 
 /** Everything a ranking works out once, before it looks at the candidates. */
 export interface RankContext {
   request: RankRequest
   ruleSet: RuleSet
-  strength: Record<Action, number>
+  tables: StrengthTables
   original: Planned
   /** Target drive of the original done healthy. */
   originalDrive: number
   /** What the original asks of every muscle. */
   originalLoads: readonly number[]
-  caps: readonly Cap[]
+  caps: CapTable
+  /** Joints a row shows: elbow, wrist and lower back always, and every capped one. */
+  shown: readonly Joint[]
   /** Reports that bind by their cap, and those that stop training of their joint. */
   sore: readonly SoreJointInput[]
   flagged: readonly SoreJointInput[]
@@ -42,26 +47,29 @@ function targetJoints(request: RankRequest, ruleSet: RuleSet): ReadonlySet<Joint
 /** Prepares a ranking: strength, the healthy original, caps and red flags. */
 export function contextOf(request: RankRequest, ruleSet: RuleSet): RankContext {
   const { athlete, sore } = request
-  const strength = strengths(athlete, ruleSet)
-  const original = planned(prepare(request.original, athlete, ruleSet, strength), request.planned, ruleSet)
+  const tables = strengthTables(athlete, ruleSet)
+  const original = planned(prepare(request.original, athlete, ruleSet, JOINTS, tables), request.planned, ruleSet)
   const limit = original.limiter?.demand ?? 0
   const drive = groupDrive(original.work, request.target, request.original.document.mechanics.grip, ruleSet)
   const flagged = sore.filter((report) => isRedFlagged(report, ruleSet))
   const standing = sore.filter((report) => !isRedFlagged(report, ruleSet))
   const across = targetJoints(request, ruleSet)
-  const stressAt = (joint: Joint) => tightestBySide(joint, original.strains, [], original.load)[0]?.stress ?? 0
+  const caps = capTable(capsFromSoreness(standing, ruleSet))
   const stop = flagged.find(
     (report) =>
-      stopsAll(report, ruleSet) || across.has(report.joint) || stressAt(report.joint) >= ruleSet.caps.loadedFrom.value,
+      stopsAll(report, ruleSet) ||
+      across.has(report.joint) ||
+      stressOf(report.joint, original.strains, original.load).stress >= ruleSet.caps.loadedFrom.value,
   )
   return {
     request,
     ruleSet,
-    strength,
+    tables,
     original,
     originalDrive: limit === 0 ? 0 : drive / limit,
     originalLoads: muscleLoads(original.demands, request.original.document.mechanics.grip, ruleSet),
-    caps: capsFromSoreness(standing, ruleSet),
+    caps,
+    shown: JOINTS.filter((joint) => ALWAYS.includes(joint) || caps.has(joint)),
     sore: standing,
     flagged,
     stop: stop ?? null,

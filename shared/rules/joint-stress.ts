@@ -1,6 +1,6 @@
 import type { JointStress } from '../contract/exercise'
-import type { Joint, Side } from '../mechanics/vocabulary'
-import { loadRange, type LoadRange } from './load-range'
+import { JOINTS, type Joint, type Side } from '../mechanics/vocabulary'
+import { loadRange, type Bound, type LoadRange } from './load-range'
 import type { Strain } from './stress'
 import type { Cap, StressChannel } from './types'
 
@@ -19,62 +19,75 @@ const strainAt = (strain: Strain, load: number): number => Math.max(0, strain.co
 /** Compression of a lower back that is not sore is shown in kN, not as stress. */
 const countsUncapped = ({ joint, channel }: Strain): boolean => !(joint === 'lowerBack' && channel === 'leaning')
 
-/** The sides of a joint that carry caps, left before right; midline joints have the one side null. */
-function cappedSides(joint: Joint, caps: readonly Cap[]): Array<Side | null> {
-  const sides = new Set(caps.filter((cap) => cap.joint === joint).map((cap) => cap.side))
-  return ([null, 'left', 'right'] as const).filter((side) => sides.has(side))
+/** The caps on one side of a joint by channel, the strictest of each. */
+interface SideCaps {
+  side: Side | null
+  byChannel: ReadonlyMap<StressChannel, Cap>
+  /** The strictest of all. */
+  strictest: Cap
 }
 
-/** The strictest cap on a channel of one side; both sides do the same work, turn about in one-sided exercises. */
-function strictest(caps: readonly Cap[], joint: Joint, channel: StressChannel, side: Side | null): Cap | null {
-  let found: Cap | null = null
-  for (const cap of caps) {
-    if (cap.joint !== joint || cap.channel !== channel || cap.side !== side) continue
-    if (found === null || cap.limit < found.limit) found = cap
-  }
-  return found
-}
+/** Caps by joint and side, left before right; joints without caps are absent. */
+export type CapTable = ReadonlyMap<Joint, readonly SideCaps[]>
 
-function tightestOf(
-  joint: Joint,
-  side: Side | null,
-  capped: boolean,
-  strains: readonly Strain[],
-  caps: readonly Cap[],
-  load: number,
-): Tightest {
-  let most: Tightest = { joint, side, stress: 0, cap: null, channel: null, source: null }
-  let used = -1
-  for (const strain of strains) {
-    if (strain.joint !== joint || (!capped && !countsUncapped(strain))) continue
-    const stress = strainAt(strain, load)
-    const cap = capped ? strictest(caps, joint, strain.channel, side) : null
-    const limit = cap?.limit ?? 1
-    const use = limit > 0 ? stress / limit : stress > 0 ? Number.POSITIVE_INFINITY : 0
-    const tied = use === used && cap !== null && most.cap !== null && cap.limit < most.cap
-    if (use > used || tied) {
-      used = use
-      most = { joint, side, stress, cap: cap?.limit ?? null, channel: strain.channel, source: cap?.source ?? null }
+/** Sorts caps for looking up; of several on the same channel and side the strictest counts, the first of equals. */
+export function capTable(caps: readonly Cap[]): CapTable {
+  const table = new Map<Joint, SideCaps[]>()
+  for (const joint of JOINTS) {
+    for (const side of [null, 'left', 'right'] as const) {
+      const own = caps.filter((cap) => cap.joint === joint && cap.side === side)
+      const byChannel = new Map<StressChannel, Cap>()
+      for (const cap of own)
+        if (cap.limit < (byChannel.get(cap.channel)?.limit ?? Infinity)) byChannel.set(cap.channel, cap)
+      const strictest = own.reduce<Cap | null>((least, cap) => (least && least.limit <= cap.limit ? least : cap), null)
+      if (strictest) table.set(joint, [...(table.get(joint) ?? []), { side, byChannel, strictest }])
     }
   }
-  if (capped && most.cap === null) {
-    const own = caps.filter((cap) => cap.joint === joint && cap.side === side)
-    const first = own.reduce<Cap | null>((least, cap) => (least && least.limit <= cap.limit ? least : cap), null)
-    most = { ...most, cap: first?.limit ?? null, source: first?.source ?? null }
+  return table
+}
+
+/** The stress of a joint as a whole at a load, caps aside. */
+export function stressOf(joint: Joint, strains: readonly Strain[], load: number): Tightest {
+  let most: Tightest = { joint, side: null, stress: 0, cap: null, channel: null, source: null }
+  for (const strain of strains) {
+    if (strain.joint !== joint || !countsUncapped(strain)) continue
+    const stress = strainAt(strain, load)
+    if (stress > most.stress) most = { ...most, stress, channel: strain.channel }
   }
   return most
 }
 
-/** The tightest channel of each side of a joint that is capped, or of the joint as a whole when none is. */
-export function tightestBySide(
+function tightestOf(
   joint: Joint,
+  { side, byChannel, strictest }: SideCaps,
   strains: readonly Strain[],
-  caps: readonly Cap[],
   load: number,
-): Tightest[] {
-  const sides = cappedSides(joint, caps)
-  if (sides.length === 0) return [tightestOf(joint, null, false, strains, caps, load)]
-  return sides.map((side) => tightestOf(joint, side, true, strains, caps, load))
+): Tightest {
+  let most: Strain | null = null
+  let used = -1
+  let stress = 0
+  let binding: Cap = strictest
+  for (const strain of strains) {
+    if (strain.joint !== joint) continue
+    const cap = byChannel.get(strain.channel)
+    if (cap === undefined) continue
+    const here = strainAt(strain, load)
+    const use = cap.limit > 0 ? here / cap.limit : here > 0 ? Number.POSITIVE_INFINITY : 0
+    if (use > used || (use === used && cap.limit < binding.limit)) {
+      used = use
+      most = strain
+      stress = here
+      binding = cap
+    }
+  }
+  return { joint, side, stress, cap: binding.limit, channel: most?.channel ?? null, source: binding.source }
+}
+
+/** The tightest channel of each side of a joint that is capped, or the joint's stress as a whole when none is. */
+export function tightestBySide(joint: Joint, strains: readonly Strain[], caps: CapTable, load: number): Tightest[] {
+  const sides = caps.get(joint)
+  if (sides === undefined) return [stressOf(joint, strains, load)]
+  return sides.map((side) => tightestOf(joint, side, strains, load))
 }
 
 export const asJointStress = ({ joint, side, stress, cap }: Tightest): JointStress => ({ joint, side, stress, cap })
@@ -83,19 +96,13 @@ export const asJointStress = ({ joint, side, stress, cap }: Tightest): JointStre
 export const isOver = ({ stress, cap }: Pick<Tightest, 'stress' | 'cap'>): boolean =>
   cap !== null && stress > cap + 1e-9
 
-/** The loads that keep every channel under the strictest of its caps. */
-export function capRange(
-  strains: readonly Strain[],
-  caps: readonly Cap[],
-): LoadRange<{ constant: number; slope: number; limit: number; strain: Strain }> {
-  return loadRange(
-    strains.flatMap((strain) => {
-      const limit = caps.reduce(
-        (least, cap) =>
-          cap.joint === strain.joint && cap.channel === strain.channel && cap.limit < least ? cap.limit : least,
-        Number.POSITIVE_INFINITY,
-      )
-      return Number.isFinite(limit) ? [{ constant: strain.constant, slope: strain.slope, limit, strain }] : []
-    }),
-  )
+/** The loads that keep every channel under the strictest of its caps. Both sides do the same work, turn about if need be. */
+export function capRange(strains: readonly Strain[], caps: CapTable): LoadRange {
+  const bounds: Bound[] = []
+  for (const { joint, channel, constant, slope } of strains) {
+    let limit = Number.POSITIVE_INFINITY
+    for (const { byChannel } of caps.get(joint) ?? []) limit = Math.min(limit, byChannel.get(channel)?.limit ?? limit)
+    if (limit !== Number.POSITIVE_INFINITY) bounds.push({ constant, slope, limit })
+  }
+  return loadRange(bounds)
 }

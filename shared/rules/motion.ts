@@ -1,6 +1,7 @@
 import type { RuleSet } from '../contract/rule-set'
 import type { ExerciseSolution, Pose, PoseAngles, Role, Vector } from '../mechanics/solution'
 import { JOINTS, type Joint } from '../mechanics/vocabulary'
+import { memo } from './memo'
 import { clamp } from './numbers'
 
 /** The solved angle that tells how far a joint moves. */
@@ -55,12 +56,12 @@ export function excursion(solution: ExerciseSolution, joint: Joint, role: Role):
 export type Motion = Record<Role, Record<Joint, number>>
 
 /** Measures every joint's excursion once. */
-export function motionOf(solution: ExerciseSolution): Motion {
+export const motionOf = memo((solution: ExerciseSolution): Motion => {
   const of = (role: Role) =>
     Object.fromEntries(JOINTS.map((joint) => [joint, excursion(solution, joint, role)])) as Record<Joint, number>
   const working = of('working')
   return { working, idle: of('idle'), middle: working }
-}
+})
 
 /** How much of a demand counts as stress: least when the joint is held still, in full from a set excursion on. */
 export function stressFactor(degrees: number, ruleSet: RuleSet): number {

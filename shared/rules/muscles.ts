@@ -1,26 +1,45 @@
 import type { RuleSet } from '../contract/rule-set'
-import { ACTIONS, type Action, type Grip } from '../mechanics/vocabulary'
+import { ACTIONS, GRIPS, type Action, type Grip } from '../mechanics/vocabulary'
 import { averageAdult } from './average-adult'
-import { effortsOf, limiterAt, workAt } from './efforts'
+import { askedAt, effortsOf } from './efforts'
 import { loadRange, strengthBounds } from './load-range'
-import { MUSCLES, TARGET_GROUPS, type Muscle, type TargetGroup } from './muscle-names'
+import { memo } from './memo'
+import { MUSCLES, TARGET_GROUPS, TARGET_GROUP_NAMES, type Muscle, type TargetGroup } from './muscle-names'
 import type { Movement } from './types'
 
-/** A muscle's role (0–1) in an action; in elbow flexion the grip turns the roles. */
-export function roleIn(action: Action, muscle: Muscle, grip: Grip, ruleSet: RuleSet): number {
-  const role = ruleSet.muscles.roles[action].value[muscle] ?? 0
-  return action === 'elbowFlexion' ? role * (ruleSet.muscles.gripRoles.value[grip][muscle] ?? 1) : role
+/** Roles as tables, by grip, action and muscle or target group, in the order of their lists. */
+interface RoleTables {
+  muscles: Record<Grip, Record<Action, readonly number[]>>
+  groups: Record<Grip, Record<Action, Readonly<Record<TargetGroup, number>>>>
 }
 
-/** The largest role any muscle of a group has in an action. */
-export function groupRoleIn(action: Action, group: TargetGroup, grip: Grip, ruleSet: RuleSet): number {
-  let most = 0
-  for (const muscle of TARGET_GROUPS[group]) {
-    const role = roleIn(action, muscle, grip, ruleSet)
-    if (role > most) most = role
+const record = <K extends string, V>(keys: readonly K[], make: (key: K) => V): Record<K, V> =>
+  Object.fromEntries(keys.map((key) => [key, make(key)])) as Record<K, V>
+
+const tablesOf = memo((ruleSet: RuleSet): RoleTables => {
+  const role = (action: Action, muscle: Muscle, grip: Grip): number => {
+    const own = ruleSet.muscles.roles[action].value[muscle] ?? 0
+    return action === 'elbowFlexion' ? own * (ruleSet.muscles.gripRoles.value[grip][muscle] ?? 1) : own
   }
-  return most
-}
+  return {
+    muscles: record(GRIPS, (grip) => record(ACTIONS, (action) => MUSCLES.map((muscle) => role(action, muscle, grip)))),
+    groups: record(GRIPS, (grip) =>
+      record(ACTIONS, (action) =>
+        record(TARGET_GROUP_NAMES, (group) =>
+          Math.max(...TARGET_GROUPS[group].map((muscle) => role(action, muscle, grip))),
+        ),
+      ),
+    ),
+  }
+})
+
+/** The roles (0–1) of every muscle in an action, in the order of `MUSCLES`; in elbow flexion the grip turns them. */
+export const rolesIn = (action: Action, grip: Grip, ruleSet: RuleSet): readonly number[] =>
+  tablesOf(ruleSet).muscles[grip][action]
+
+/** The largest role any muscle of a group has in an action. */
+export const groupRoleIn = (action: Action, group: TargetGroup, grip: Grip, ruleSet: RuleSet): number =>
+  tablesOf(ruleSet).groups[grip][action][group]
 
 /** How hard a group's hardest-driven muscle works: the largest role × demand, of demands that train. */
 export function groupDrive(
@@ -43,14 +62,15 @@ export function muscleDrives(
   grip: Grip,
   ruleSet: RuleSet,
 ): Array<{ muscle: Muscle; drive: number }> {
-  return MUSCLES.map((muscle) => {
-    let drive = 0
-    for (const action of ACTIONS) {
-      const value = roleIn(action, muscle, grip, ruleSet) * (work.get(action) ?? 0)
-      if (value > drive) drive = value
-    }
-    return { muscle, drive }
-  }).sort((one, other) => other.drive - one.drive)
+  const drives = MUSCLES.map(() => 0)
+  for (const [action, demand] of work) {
+    rolesIn(action, grip, ruleSet).forEach((role, index) => {
+      if (role * demand > drives[index]!) drives[index] = role * demand
+    })
+  }
+  return MUSCLES.map((muscle, index) => ({ muscle, drive: drives[index]! })).sort(
+    (one, other) => other.drive - one.drive,
+  )
 }
 
 /**
@@ -64,9 +84,9 @@ export function musclesOf(
   const efforts = effortsOf(movement, averageAdult('unspecified', ruleSet), ruleSet)
   const range = loadRange(strengthBounds(efforts, 1))
   const load = Number.isFinite(range.most) ? range.most : 0
-  const limit = limiterAt(efforts, load)?.demand ?? 0
-  if (limit === 0) return []
-  return muscleDrives(workAt(efforts, load), movement.mechanics.grip, ruleSet)
-    .map(({ muscle, drive }) => ({ muscle, drive: drive / limit }))
+  const { limiter, work } = askedAt(efforts, load)
+  if (limiter === null) return []
+  return muscleDrives(work, movement.mechanics.grip, ruleSet)
+    .map(({ muscle, drive }) => ({ muscle, drive: drive / limiter.demand }))
     .filter(({ drive }) => drive >= ruleSet.muscles.leastListed.value)
 }

@@ -1,13 +1,12 @@
 import type { RuleSet } from '../contract/rule-set'
 import type { Dose } from '../contract/session'
 import { inRepetitions, intensity } from './dose'
-import { demandsAt, effortsOf, limiterAt, workAt, type Effort } from './efforts'
+import { askedAt, effortsOf, type Asked, type Effort } from './efforts'
 import { loadRange, strengthBounds } from './load-range'
-import { motionOf } from './motion'
-import { strengths } from './strength'
+import { strengthTables, type StrengthTables } from './strength'
 import { strainsOf, type Strain } from './stress'
 import type { Athlete, Candidate } from './types'
-import type { Action } from '../mechanics/vocabulary'
+import { JOINTS, type Joint } from '../mechanics/vocabulary'
 
 /** An exercise with everything about it that depends on the athlete but not on the load. */
 export interface Prepared {
@@ -21,22 +20,21 @@ export function prepare(
   candidate: Candidate,
   athlete: Athlete,
   ruleSet: RuleSet,
-  strength: Record<Action, number> = strengths(athlete, ruleSet),
+  joints: readonly Joint[] = JOINTS,
+  tables: StrengthTables = strengthTables(athlete, ruleSet),
 ): Prepared {
   const movement = { mechanics: candidate.document.mechanics, solution: candidate.solution }
-  const motion = motionOf(candidate.solution)
-  const efforts = effortsOf(movement, athlete, ruleSet, strength, motion)
-  return { candidate, efforts, strains: strainsOf(movement, efforts, athlete, ruleSet, motion) }
+  return {
+    candidate,
+    efforts: effortsOf(movement, athlete, ruleSet, tables),
+    strains: strainsOf(movement, athlete, ruleSet, joints, tables),
+  }
 }
 
 /** A planned exercise as a healthy athlete would do it. */
-export interface Planned extends Prepared {
+export interface Planned extends Prepared, Asked {
   /** kg as mechanics reads it. */
   load: number
-  demands: ReadonlyMap<Action, number>
-  /** Demands as far as they train muscles. */
-  work: ReadonlyMap<Action, number>
-  limiter: { action: Action; demand: number } | null
   /** Share of the 1RM that the planned repetitions and reserve stand for. */
   intensity: number
   repetitions: number
@@ -63,9 +61,7 @@ export function planned(prepared: Prepared, dose: Dose, ruleSet: RuleSet): Plann
   return {
     ...prepared,
     load,
-    demands: demandsAt(efforts, load),
-    work: workAt(efforts, load),
-    limiter: limiterAt(efforts, load),
+    ...askedAt(efforts, load),
     intensity: share,
     repetitions,
   }

@@ -1,8 +1,8 @@
 import type { Preview } from '../contract/exercise'
 import type { RuleSet } from '../contract/rule-set'
 import { JOINTS, type Action } from '../mechanics/vocabulary'
-import { demandOf, effortsOf, limiterAt, workAt } from './efforts'
-import { asJointStress, tightestBySide } from './joint-stress'
+import { askedAt, demandOf, effortsOf } from './efforts'
+import { asJointStress, capTable, tightestBySide } from './joint-stress'
 import { loadRange, strengthBounds } from './load-range'
 import { muscleDrives } from './muscles'
 import { compressionAt, strainsOf } from './stress'
@@ -20,11 +20,13 @@ export function previewOf(
   ruleSet: RuleSet,
 ): Preview {
   const efforts = effortsOf(movement, athlete, ruleSet)
-  const strains = strainsOf(movement, efforts, athlete, ruleSet)
+  const strains = strainsOf(movement, athlete, ruleSet)
+  const asked = askedAt(efforts, load)
+  const table = capTable(caps)
   const range = loadRange(strengthBounds(efforts, 1))
   const grows = Number.isFinite(range.most)
   const possible = range.least <= range.most
-  const limiter = grows && possible && range.mostBy ? range.mostBy.action : limiterAt(efforts, load)?.action
+  const limiter = grows && possible && range.mostBy ? range.mostBy.action : asked.limiter?.action
   return {
     frames: movement.solution.frames.map((frame, index) => {
       const strongest = new Map<Action, Preview['frames'][number]['actions'][number]>()
@@ -40,14 +42,14 @@ export function previewOf(
       return {
         name: frame.name,
         actions: [...strongest.values()].sort((one, other) => other.demand - one.demand),
-        joints: JOINTS.flatMap((joint) => tightestBySide(joint, own, caps, load)).map(asJointStress),
-        compression: compressionAt(efforts, index, load, ruleSet),
+        joints: JOINTS.flatMap((joint) => tightestBySide(joint, own, table, load)).map(asJointStress),
+        compression: compressionAt(movement, index, athlete, load, ruleSet),
         reactions: frame.reactions.map(({ support, a, b }) => ({ support, share: a + (b * load) / athlete.bodyMass })),
       }
     }),
     oneRepMax: grows && possible ? range.most : null,
     limiter: limiter ?? null,
-    muscles: muscleDrives(workAt(efforts, load), movement.mechanics.grip, ruleSet).filter(
+    muscles: muscleDrives(asked.work, movement.mechanics.grip, ruleSet).filter(
       ({ drive }) => drive >= ruleSet.muscles.leastListed.value,
     ),
     coordination: movement.coordination,

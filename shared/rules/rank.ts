@@ -32,7 +32,7 @@ function originalRow(context: RankContext): RankResult['originalRow'] {
     },
     targetDrive: context.originalDrive,
     limiter: limiter.action,
-    joints: shownJoints(original, context, load).map(asJointStress),
+    joints: shownJoints(original.strains, context, load).map(asJointStress),
     coordination: candidate.coordination,
     dose: { ...request.planned },
   }
@@ -44,7 +44,7 @@ function originalRow(context: RankContext): RankResult['originalRow'] {
  */
 export function consideredIn(context: RankContext): readonly Candidate[] {
   const { original, ruleSet, request } = context
-  const loaded = shownJoints(original, context, original.load).some(
+  const loaded = shownJoints(original.strains, context, original.load).some(
     ({ cap, stress }) => cap !== null && stress >= ruleSet.caps.loadedFrom.value,
   )
   return loaded ? request.candidates : request.candidates.filter(({ id }) => id !== original.candidate.id)

@@ -1,25 +1,24 @@
 import type { Dose } from '../contract/session'
 import type { LeftOutRow, SwapRow } from '../contract/swap'
 import { SKILL_GRADES } from '../contract/exercise'
-import { JOINTS, type Joint } from '../mechanics/vocabulary'
 import type { RankContext } from './context'
 import { inUnit, intensity, setAt } from './dose'
-import { demandsAt, limiterAt, workAt } from './efforts'
-import { asJointStress, capRange, isOver, tightestBySide, type Tightest } from './joint-stress'
+import { askedAt, effortsOf, type Asked, type Effort } from './efforts'
+import { asJointStress, capRange, isOver, stressOf, tightestBySide, type Tightest } from './joint-stress'
 import { loadRange, strengthBounds } from './load-range'
 import { groupDrive } from './muscles'
-import { capital, equipmentName, jointName, percent, TARGET_NAMES } from './names'
-import { prepare, type Prepared } from './original'
-import { beyondStrengthReason, overCapReason, swapReason } from './reasons'
+import { equipmentName, jointName } from './names'
+import { beyondStrengthReason, notTrainedReason, overCapReason, swapReason, tooLittleReason } from './reasons'
 import { factorsOf, mostUsed, scoreOf } from './score'
-import { equipmentAt, lacking, settingsOf } from './settings'
+import { equipmentAt, lacking, roundLoad, settingsOf, type Settings } from './settings'
+import { strainsOf, type Strain } from './stress'
 import type { Candidate, SoreJointInput } from './types'
 
 /** A candidate's outcome: a row still without its rank, or why it is left out. */
 export type Rated = { row: Omit<SwapRow, 'rank'> } | { leftOut: LeftOutRow }
 
-/** Joints that every row shows. */
-const ALWAYS: readonly Joint[] = ['elbow', 'wrist', 'lowerBack']
+/** Stands in where an exercise has no load that any place could set. */
+const ANY: Settings = { kind: 'none', lightest: 0, heaviest: 0, steps: null }
 
 const nameOf = ({ id, document }: Candidate) => ({ id, slug: document.slug, name: document.name })
 
@@ -60,12 +59,8 @@ export function doseOf(
 }
 
 /** Stress of every joint a row shows, with the sides and caps that bind. */
-export function shownJoints({ strains }: Prepared, context: RankContext, load: number): Tightest[] {
-  const capped = new Set(context.caps.map((cap) => cap.joint))
-  return JOINTS.filter((joint) => ALWAYS.includes(joint) || capped.has(joint)).flatMap((joint) =>
-    tightestBySide(joint, strains, context.caps, load),
-  )
-}
+export const shownJoints = (strains: readonly Strain[], { shown, caps }: RankContext, load: number): Tightest[] =>
+  shown.flatMap((joint) => tightestBySide(joint, strains, caps, load))
 
 /** The most negative load still worth calling assistance, as whole kilograms of it; null when it would carry all. */
 function assistanceFor(candidate: Candidate, load: number, bodyMass: number): number | null {
@@ -74,103 +69,119 @@ function assistanceFor(candidate: Candidate, load: number, bodyMass: number): nu
   return Math.ceil(-load - 1e-9)
 }
 
-/** Rates one candidate in a ranking. */
-export function rate(candidate: Candidate, context: RankContext): Rated {
-  const { request, ruleSet, original, caps } = context
-  const { athlete, place, planned, target, intent } = request
-  const { document } = candidate
-  const grip = document.mechanics.grip
-  const prepared = prepare(candidate, athlete, ruleSet, context.strength)
-  const { efforts, strains } = prepared
-  const drive = (at: number) => groupDrive(workAt(efforts, at), target, grip, ruleSet)
-  const { name, plural } = TARGET_NAMES[target]
+/** Where the limiter is at the planned intensity with sound joints, or the lightest there is (kg). */
+function healthyLoad(efforts: readonly Effort[], { lightest, heaviest }: Settings, { original }: RankContext): number {
+  const range = loadRange(strengthBounds(efforts, original.intensity))
+  return Math.max(lightest, Math.min(range.least <= range.most ? range.most : Number.NEGATIVE_INFINITY, heaviest))
+}
 
-  const equipment = equipmentAt(document, place)
-  const settings = settingsOf(document, equipment === null ? null : place, equipment ?? document.equipment, ruleSet)
-  const healthy = loadRange(strengthBounds(efforts, original.intensity))
-  const possible = healthy.least <= healthy.most
-  const healthyLoad = Math.max(
-    settings?.lightest ?? 0,
-    Math.min(possible ? healthy.most : Number.NEGATIVE_INFINITY, settings?.heaviest ?? 0),
-  )
-  const healthyLimiter = limiterAt(efforts, healthyLoad)
-  const healthyDrive = healthyLimiter ? drive(healthyLoad) / healthyLimiter.demand : 0
-  const notTrained = (share: number) =>
-    leave(
-      candidate,
-      'targetNotTrained',
-      `The ${name} ${plural ? 'reach' : 'reaches'} only ${percent(share)} of what ${plural ? 'they' : 'it'} can give when the set ends.`,
-    )
-  if (healthyLimiter === null || healthyDrive < ruleSet.score.leastTargetDrive.value) return notTrained(healthyDrive)
-  if (equipment === null || settings === null) {
+/** Why the exercise cannot be given here to this athlete at all, whatever the load. */
+function notHere(
+  candidate: Candidate,
+  settings: Settings | null,
+  { request: { place, athlete } }: RankContext,
+): Rated | null {
+  const { document } = candidate
+  if (settings === null) {
     const missing = place ? lacking(document, place).map(equipmentName) : []
-    return leave(
-      candidate,
-      'noEquipment',
-      missing.length > 0
-        ? `Needs ${missing.join(' and ')}, not found at this place.`
-        : 'No load at this place fits it.',
-    )
+    const reason =
+      missing.length > 0 ? `Needs ${missing.join(' and ')}, not found at this place.` : 'No load at this place fits it.'
+    return leave(candidate, 'noEquipment', reason)
   }
   if (SKILL_GRADES.indexOf(document.skill) > SKILL_GRADES.indexOf(athlete.skill)) {
     return leave(candidate, 'beyondSkill', `Graded ${document.skill}; the profile says ${athlete.skill}.`)
   }
+  return null
+}
 
-  const allowed = capRange(strains, caps)
-  const ceiling = Math.min(healthyLoad, allowed.least <= allowed.most ? allowed.most : Number.NEGATIVE_INFINITY)
-  const load = settings.round(ceiling) ?? settings.lightest
-  for (const report of context.flagged) {
-    const stress = tightestBySide(report.joint, strains, [], load)[0]?.stress ?? 0
-    if (stress >= ruleSet.caps.loadedFrom.value) return leave(candidate, 'redFlag', redFlagReason(report))
-  }
-  const limiter = limiterAt(efforts, load)
+/** The flagged joint that a candidate would load. */
+function acrossFlag(
+  candidate: Candidate,
+  load: number,
+  { flagged, ruleSet, request, tables }: RankContext,
+): Rated | null {
+  if (flagged.length === 0) return null
+  const movement = { mechanics: candidate.document.mechanics, solution: candidate.solution }
+  const strains = strainsOf(
+    movement,
+    request.athlete,
+    ruleSet,
+    flagged.map(({ joint }) => joint),
+    tables,
+  )
+  const crossed = flagged.find(({ joint }) => stressOf(joint, strains, load).stress >= ruleSet.caps.loadedFrom.value)
+  return crossed ? leave(candidate, 'redFlag', redFlagReason(crossed)) : null
+}
+
+/** Why not one repetition is possible, with the assistance that would help. */
+function tooHard(
+  candidate: Candidate,
+  efforts: readonly Effort[],
+  load: number,
+  limiter: NonNullable<Asked['limiter']>,
+  context: RankContext,
+): Rated {
+  const { athlete, planned } = context.request
+  const { assistedForm } = candidate.document
+  const share = limiter.demand > 1 ? 1 : intensity(1, planned.rir, context.ruleSet)
+  const assistance = assistanceFor(candidate, loadRange(strengthBounds(efforts, share)).most, athlete.bodyMass)
+  const form = assistedForm === undefined ? null : (context.names.get(assistedForm) ?? null)
+  const reason = beyondStrengthReason(candidate, limiter, load, planned.rir, assistance, form)
+  return leave(candidate, 'beyondStrength', reason)
+}
+
+/** Rates one candidate in a ranking. */
+export function rate(candidate: Candidate, context: RankContext): Rated {
+  const { request, ruleSet, original } = context
+  const { athlete, place, planned, target, intent } = request
+  const { document } = candidate
+  const grip = document.mechanics.grip
+  const driveOf = ({ work, limiter }: Asked) =>
+    limiter === null ? 0 : groupDrive(work, target, grip, ruleSet) / limiter.demand
+  const notTrained = (share: number) => leave(candidate, 'targetNotTrained', notTrainedReason(target, share))
+
+  const movement = { mechanics: document.mechanics, solution: candidate.solution }
+  const efforts = effortsOf(movement, athlete, ruleSet, context.tables)
+  const equipment = equipmentAt(document, place)
+  const settings = equipment && settingsOf(document, place, equipment, ruleSet)
+  const somewhere = settings ?? settingsOf(document, null, document.equipment, ruleSet) ?? ANY
+  const healthy = healthyLoad(efforts, somewhere, context)
+  const healthyDrive = driveOf(askedAt(efforts, healthy))
+  if (healthyDrive < ruleSet.score.leastTargetDrive.value) return notTrained(healthyDrive)
+  const absent = notHere(candidate, settings, context)
+  if (absent !== null || settings === null) return absent ?? notTrained(healthyDrive)
+
+  const strains = strainsOf(movement, athlete, ruleSet, context.shown, context.tables)
+  const range = capRange(strains, context.caps)
+  const allowed = range.least <= range.most ? range.most : Number.NEGATIVE_INFINITY
+  const load = roundLoad(settings, Math.min(healthy, allowed)) ?? settings.lightest
+  const flagged = acrossFlag(candidate, load, context)
+  if (flagged !== null) return flagged
+  const asked = askedAt(efforts, load)
+  const { limiter, demands } = asked
   if (limiter === null) return notTrained(0)
   const set = setAt(limiter.demand, { repetitions: original.repetitions, rir: planned.rir }, intent, ruleSet)
-  if (set === null) {
-    const range = loadRange(strengthBounds(efforts, limiter.demand > 1 ? 1 : intensity(1, planned.rir, ruleSet)))
-    const assistance = assistanceFor(candidate, range.most, athlete.bodyMass)
-    const form = document.assistedForm === undefined ? null : (context.names.get(document.assistedForm) ?? null)
-    return leave(
-      candidate,
-      'beyondStrength',
-      beyondStrengthReason(candidate, limiter, load, planned.rir, assistance, form),
-    )
+  if (set === null) return tooHard(candidate, efforts, load, limiter, context)
+  const shown = shownJoints(strains, context, load)
+  const tightest = mostUsed(shown)
+  if (tightest !== null && isOver(tightest)) {
+    const assistance = assistanceFor(candidate, allowed, athlete.bodyMass)
+    return leave(candidate, 'overCap', overCapReason(candidate, tightest, load, assistance))
   }
-  const shown = shownJoints(prepared, context, load)
-  const over = mostUsed(shown.filter(isOver))
-  if (over !== null) {
-    return leave(
-      candidate,
-      'overCap',
-      overCapReason(candidate, over, load, assistanceFor(candidate, allowed.most, athlete.bodyMass)),
-    )
-  }
-
-  const demands = demandsAt(efforts, load)
-  const targetDrive = drive(load) / limiter.demand
+  const targetDrive = driveOf(asked)
   if (targetDrive < ruleSet.score.leastTargetDrive.value) return notTrained(targetDrive)
+
   const repetitions = inUnit(set.repetitions, document.unit, ruleSet)
+  const { coordination } = candidate
+  const keptIntensity = set.kept
   const factors = factorsOf(
-    {
-      targetDrive,
-      keptIntensity: set.kept,
-      repetitions,
-      unit: document.unit,
-      demands,
-      coordination: candidate.coordination,
-      grip,
-      tightest: shown,
-    },
+    { targetDrive, keptIntensity, repetitions, unit: document.unit, demands, coordination, grip, tightest: shown },
     { drive: context.originalDrive, muscleLoads: context.originalLoads },
     request,
     ruleSet,
   )
   if (factors.kept.value < ruleSet.score.leastKept.value) {
-    return leave(
-      candidate,
-      'targetNotTrained',
-      `${capital(name)} would keep only ${percent(factors.kept.value)} of the planned work.`,
-    )
+    return leave(candidate, 'targetNotTrained', tooLittleReason(target, factors.kept.value))
   }
   return {
     row: {
@@ -184,11 +195,11 @@ export function rate(candidate: Candidate, context: RankContext): Rated {
       targetDrive,
       limiter: limiter.action,
       joints: shown.map(asJointStress),
-      coordination: candidate.coordination,
+      coordination,
       dose: doseOf(candidate, load, repetitions, planned),
       factors,
       reason: swapReason(
-        { targetDrive, keptIntensity: set.kept, limiter: limiter.action, tightest: mostUsed(shown) },
+        { targetDrive, keptIntensity, limiter: limiter.action, tightest },
         candidate,
         request,
         ruleSet,

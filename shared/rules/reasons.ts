@@ -98,3 +98,13 @@ export function beyondStrengthReason(
   const form = assistedName === null ? '' : ` (${assistedName})`
   return `${asked} With ${kilograms(assistance)} of assistance${form} it would become possible.`
 }
+
+/** Why an exercise is no swap for the target. */
+export function notTrainedReason(target: RankRequest['target'], drive: number): string {
+  const { name, plural } = TARGET_NAMES[target]
+  return `The ${name} ${plural ? 'reach' : 'reaches'} only ${percent(drive)} of what ${plural ? 'they' : 'it'} can give when the set ends.`
+}
+
+/** Why an exercise that trains the target keeps too little of the plan. */
+export const tooLittleReason = (target: RankRequest['target'], kept: number): string =>
+  `The ${TARGET_NAMES[target].name} would keep only ${percent(kept)} of the planned work.`

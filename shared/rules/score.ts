@@ -3,7 +3,7 @@ import type { SwapRow } from '../contract/swap'
 import { ACTIONS, type Action, type Grip } from '../mechanics/vocabulary'
 import type { Tightest } from './joint-stress'
 import { MUSCLES } from './muscle-names'
-import { groupRoleIn, roleIn } from './muscles'
+import { groupRoleIn, rolesIn } from './muscles'
 import { ACTION_NAMES, jointName, percent, TARGET_NAMES } from './names'
 import type { RankRequest } from './types'
 
@@ -112,11 +112,14 @@ function lean({ demands, grip }: ScoreInput, target: RankRequest['target'], rule
 
 /** What action demands ask of every muscle: Σ role × demand, in the order of the muscles' list. */
 export function muscleLoads(demands: Demands, grip: Grip, ruleSet: RuleSet): number[] {
-  return MUSCLES.map((muscle) => {
-    let sum = 0
-    for (const action of ACTIONS) sum += roleIn(action, muscle, grip, ruleSet) * (demands.get(action) ?? 0)
-    return sum
-  })
+  const loads = MUSCLES.map(() => 0)
+  for (const action of ACTIONS) {
+    const demand = demands.get(action)
+    if (demand === undefined) continue
+    const roles = rolesIn(action, grip, ruleSet)
+    for (let i = 0; i < roles.length; i++) loads[i]! += roles[i]! * demand
+  }
+  return loads
 }
 
 /**

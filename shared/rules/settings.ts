@@ -7,10 +7,19 @@ import type { Place } from './types'
 
 /** The loads an exercise can be set to at a place, kg as mechanics reads them (assistance is negative). */
 export interface Settings {
+  kind: ExerciseDocument['load']['kind']
   lightest: number
   heaviest: number
-  /** The heaviest setting not above a load; null below the lightest. */
-  round: (load: number) => number | null
+  /** Settings above body weight alone, or of assistance as positive amounts; null when there are none. */
+  steps: LoadSteps | null
+}
+
+/** The heaviest setting not above a load; null below the lightest. */
+export function roundLoad({ kind, steps }: Settings, load: number): number | null {
+  if (kind === 'assistance') return steps && roundToSteps(load, steps, 'assistance')
+  if (kind === 'external') return steps && roundToSteps(load, steps, 'load')
+  if (load < 0) return null
+  return kind === 'added' && steps ? (roundToSteps(load, steps, 'load') ?? 0) : 0
 }
 
 /** The set of equipment the place can serve an exercise with; null when it cannot. */
@@ -49,17 +58,13 @@ export function settingsOf(
   const { kind, from } = document.load
   const step = ruleSet.dose.fallbackStep.value
   const most = document.load.most ?? LIMITS.load.max
-  if (kind === 'none') return { lightest: 0, heaviest: 0, round: (load) => (load >= 0 ? 0 : null) }
+  if (kind === 'none') return { kind, lightest: 0, heaviest: 0, steps: null }
   const found = stepsAt(document, place, equipment)
   if (kind === 'added') {
     // What adds the load may be missing where the exercise itself is possible.
     const canAdd = place === null || from === undefined || place.equipment.has(from)
     const steps = canAdd ? cut(found ?? { first: step, step, last: most }, document.load.least ?? 0, most) : null
-    return {
-      lightest: 0,
-      heaviest: steps?.last ?? 0,
-      round: (load) => (load < 0 ? null : steps ? (roundToSteps(load, steps, 'load') ?? 0) : 0),
-    }
+    return { kind, lightest: 0, heaviest: steps?.last ?? 0, steps }
   }
   if (kind === 'assistance') {
     const range = [document.load.least, document.load.most].filter((load) => load !== undefined).map(Math.abs)
@@ -67,12 +72,12 @@ export function settingsOf(
     const limit = range.length === 0 ? -LIMITS.load.min : Math.max(...range)
     const steps = cut(found ?? { first: Math.max(least, step), step, last: limit }, least, limit)
     if (!steps) return null
-    return { lightest: -steps.last, heaviest: -steps.first, round: (load) => roundToSteps(load, steps, 'assistance') }
+    return { kind, lightest: -steps.last, heaviest: -steps.first, steps }
   }
   const least = document.load.least ?? 0
   const steps = cut(found ?? { first: least > 0 ? least : step, step, last: most }, least, most)
   if (!steps) return null
-  return { lightest: steps.first, heaviest: steps.last, round: (load) => roundToSteps(load, steps, 'load') }
+  return { kind, lightest: steps.first, heaviest: steps.last, steps }
 }
 
 /** Steps cut to bounds, still on their own grid; null when none is left. */

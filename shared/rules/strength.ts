@@ -28,3 +28,26 @@ export function strengths(
   }
   return result
 }
+
+/** Strength as an exercise finds it: with the hand working, and with straps or a cuff carrying it. */
+export interface StrengthTables {
+  working: Readonly<Record<Action, number>>
+  carried: Readonly<Record<Action, number>>
+}
+
+const WRIST: readonly Action[] = ['wristFlexion', 'wristExtension', 'wristRadialDeviation', 'wristUlnarDeviation']
+
+/**
+ * Both tables for an athlete. The finger muscles that hold a load or press on the ground cross the wrist and stiffen it,
+ * unless the hand is carried.
+ */
+export function strengthTables(
+  athlete: Pick<Athlete, 'sex' | 'bodyMass' | 'factors'>,
+  ruleSet: RuleSet,
+): StrengthTables {
+  const carried = strengths(athlete, ruleSet)
+  const fingers = ruleSet.strength.grippingWristArm.value * carried.grip
+  const working = { ...carried }
+  for (const action of WRIST) working[action] += fingers
+  return { working, carried }
+}

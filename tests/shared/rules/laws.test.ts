@@ -157,7 +157,7 @@ describe('a ranking', () => {
   })
 
   it('mirrors with the sore side', () => {
-    const mirror = (side: Side | null) => (side === null ? null : side === 'left' ? 'right' : 'left')
+    const mirror = (side: Side | null): Side | null => (side === null ? null : side === 'left' ? 'right' : 'left')
     /** Sides turned round where asked, put in one order; sentences and the order of two sore sides are left aside. */
     const facing = (result: ReturnType<typeof rank>, turn: (side: Side | null) => Side | null) => {
       const joints = (row: {
