@@ -101,6 +101,7 @@ export const exerciseMechanics = z.strictObject({
   moments: z.array(directMoment).max(3).optional(),
   referenceLoad: z.number().min(-1).max(4),
   gripFree: z.boolean().optional(),
+  headRests: z.boolean().optional(),
 }) as unknown as z.ZodType<ExerciseMechanics>
 
 /** How the external load of an exercise is meant and bounded. */

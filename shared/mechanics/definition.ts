@@ -41,6 +41,8 @@ export interface ExerciseMechanics {
   referenceLoad: number
   /** Straps, hooks or a cuff carry the hand, so that the grip does not. */
   gripFree?: boolean
+  /** The head lies on the floor or on its pad, so that the neck does not carry it; its weight stays with the body. */
+  headRests?: boolean
 }
 
 export interface Frame {

@@ -140,6 +140,7 @@ export function jointTerms(
     if (!body || !load) continue
     for (const { axis, direction, kind } of cut.read) {
       if (kind === 'moment' && cut.name === 'lumbar' && flatBack(mechanics)) continue
+      if (cut.name === 'neck' && mechanics.headRests) continue
       const reports = axis === 'handAxial' || axis === 'lumbarAxial'
       const value = (side: { force: Vector; moment: Vector }) =>
         (reports ? 1 : -1) * dot(kind === 'moment' ? side.moment : side.force, direction)

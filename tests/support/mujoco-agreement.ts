@@ -267,6 +267,11 @@ export function agreement(
       const far = beyond(parts, reading.part)
       const heldFar = held.filter((part) => far.includes(part))
       const heldNear = held.filter((part) => !far.includes(part))
+      if (mechanics.headRests && reading.axis === 'neck') {
+        if (solved.terms.some((term) => term.axis === 'neck')) result.misses.push('neck under a resting head')
+        result.untold.push(`${reading.role} ${reading.axis}`)
+        continue
+      }
       // A back flat on its pad asks nothing of the trunk muscles.
       if (mechanics.firstPushes === 'squareToTrunk' && reading.axis.startsWith('trunk')) {
         if (solved.terms.some((term) => term.axis === reading.axis))

@@ -60,4 +60,18 @@ describe('joints of limbs that pads hold', () => {
     const pushing = { ...seated, loads: [{ at: 'feet', direction: { angle: 180 } } as const], referenceLoad: 1 }
     expect(term(first(pushing), 'hipFlexion')!.b).toBeLessThan(0)
   })
+
+  it('a head that lies down leaves the neck out and its weight in', () => {
+    const bridge: ExerciseMechanics = {
+      ...base,
+      supports: ['upperBack', 'feet'],
+      rise: 0.06,
+      balance: { solve: 'trunk' },
+      frames: twice({ trunk: { lean: -105 }, arms: { shoulder: 0, elbow: 0 }, legs: { ankle: [0.24, -0.08] } }),
+    }
+    const lying = first({ ...bridge, headRests: true })
+    expect(term(first(bridge), 'neck')).toBeDefined()
+    expect(term(lying, 'neck')).toBeUndefined()
+    expect(term(lying, 'hipFlexion')).toEqual(term(first(bridge), 'hipFlexion'))
+  })
 })
