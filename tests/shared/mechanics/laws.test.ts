@@ -1,0 +1,333 @@
+import fc from 'fast-check'
+import { describe, expect, it, vi } from 'vitest'
+import { solveBalance } from '#shared/mechanics/balance'
+import { isDistal, SEGMENT_NAMES, type CutName, type SegmentRef } from '#shared/mechanics/bodies'
+import { cutWrench, reactions, wrench } from '#shared/mechanics/equilibrium'
+import {
+  SEGMENTS,
+  SEXES,
+  solveExercise,
+  type ExerciseMechanics,
+  type ExerciseSolution,
+  type Frame,
+  type Term,
+  type Vector,
+} from '#shared/mechanics/index'
+import { solvable, trySolve } from '#tests/support/mechanics-arbitrary'
+import { hang, MECHANICS_CASES, pulldown } from '#tests/support/mechanics-cases'
+
+// Most drawn definitions cannot be held, and are thrown away after solving them.
+vi.setConfig({ testTimeout: 60_000 })
+const RUNS = { seed: 4711, numRuns: 40 }
+const solved = solvable('male')
+
+/** Terms by axis and role, of all frames. */
+function terms(solution: ExerciseSolution): Map<string, Term> {
+  return new Map(
+    solution.frames.flatMap((frame, index) =>
+      frame.terms.map((term) => [`${index} ${term.axis} ${term.role}`, term] as const),
+    ),
+  )
+}
+
+function expectTerms(actual: ExerciseSolution, wanted: ExerciseSolution, a: number, b: number): void {
+  const [mine, theirs] = [terms(actual), terms(wanted)]
+  for (const key of new Set([...mine.keys(), ...theirs.keys()])) {
+    expect(mine.get(key)?.a ?? 0, `${key}: a`).toBeCloseTo(a * (theirs.get(key)?.a ?? 0), 9)
+    expect(mine.get(key)?.b ?? 0, `${key}: b`).toBeCloseTo(b * (theirs.get(key)?.b ?? 0), 9)
+  }
+}
+
+describe('loads', () => {
+  it('act in proportion: twice the ratio asks twice of every joint and leaves gravity as it is', () => {
+    fc.assert(
+      fc.property(solved, fc.constantFrom(0.5, 2, 3), ({ mechanics, solution }, factor) => {
+        // Grip is left out: how far a hand is opened is judged once, at the reference load.
+        const scaled: ExerciseMechanics = {
+          ...mechanics,
+          loads: mechanics.loads.map((load) => ({ ...load, ratio: (load.ratio ?? 1) * factor })),
+          moments: mechanics.moments?.map((moment) => ({ ...moment, ratio: (moment.ratio ?? 1) * factor })) ?? [],
+          referenceLoad: mechanics.referenceLoad / factor,
+          gripFree: true,
+        }
+        expectTerms(solveExercise(scaled, 'male'), solveExercise({ ...mechanics, gripFree: true }, 'male'), 1, factor)
+        expect(solution.frames).toHaveLength(mechanics.frames.length)
+      }),
+      RUNS,
+    )
+  })
+
+  it('add up: two loads ask of every joint what each asks alone', () => {
+    // A load on the feet lifts the thighs off the seat, so that its presence changes what the seat holds.
+    const pads = solved.filter(
+      ({ mechanics }) =>
+        mechanics.balance === undefined &&
+        mechanics.loads.length === 2 &&
+        mechanics.loads.every(({ at }) => at !== 'feet'),
+    )
+    fc.assert(
+      fc.property(pads, ({ mechanics }) => {
+        const only = (loads: ExerciseMechanics['loads']) =>
+          terms(solveExercise({ ...mechanics, loads, moments: [], gripFree: true }, 'male'))
+        const [both, first, second] = [
+          only(mechanics.loads),
+          only(mechanics.loads.slice(0, 1)),
+          only(mechanics.loads.slice(1)),
+        ]
+        for (const key of both.keys()) {
+          expect(both.get(key)!.b).toBeCloseTo((first.get(key)?.b ?? 0) + (second.get(key)?.b ?? 0), 9)
+          expect(both.get(key)!.a).toBeCloseTo(first.get(key)?.a ?? 0, 9)
+        }
+      }),
+      { ...RUNS, numRuns: 25 },
+    )
+  })
+})
+
+describe('supports', () => {
+  const standing = solved.filter(({ solution }) => solution.frames[0]!.reactions.length > 0)
+
+  it('carry the whole weight, and of the load what it presses down', () => {
+    fc.assert(
+      fc.property(standing, ({ mechanics, solution }) => {
+        for (const [index, frame] of solution.frames.entries()) {
+          const { load } = solveBalance(mechanics, mechanics.frames[index]!, SEGMENTS.male, '')
+          const down = -wrench(load, [0, 0, 0]).force[2]
+          expect(frame.reactions.reduce((sum, { a }) => sum + a, 0)).toBeCloseTo(1, 12)
+          expect(frame.reactions.reduce((sum, { b }) => sum + b, 0)).toBeCloseTo(down, 9)
+        }
+      }),
+      RUNS,
+    )
+  })
+
+  it('leave every joint the same from either side of its cut', () => {
+    const all: SegmentRef[] = SEGMENT_NAMES.flatMap((name): SegmentRef[] =>
+      ['pelvis', 'upperTrunk', 'head'].includes(name) ? [{ name }] : ([0, 1] as const).map((limb) => ({ name, limb })),
+    )
+    const cuts: { name: CutName; limb?: 0 | 1 }[] = [
+      { name: 'lumbar' },
+      { name: 'neck' },
+      ...(['wrist', 'elbow', 'shoulder', 'hip', 'knee', 'ankle'] as const).flatMap((name) =>
+        ([0, 1] as const).map((limb) => ({ name, limb })),
+      ),
+    ]
+    fc.assert(
+      fc.property(standing, ({ mechanics }) => {
+        for (const frame of mechanics.frames) {
+          const { groups, body, load } = solveBalance(mechanics, frame, SEGMENTS.male, '')
+          for (const applied of [body, load]) {
+            const whole = [...applied, ...reactions(groups, applied).flat()]
+            for (const cut of cuts) {
+              const at: Vector = [0.1, 0.2, 0.3]
+              const near = cutWrench(whole, () => false, all, { ...cut, at })!
+              // As if a pad held the far side: the joint is then asked from the near one.
+              const far = cutWrench(whole, (segment) => isDistal(segment, cut.name, cut.limb), all, { ...cut, at })!
+              near.force.forEach((value, i) => expect(value).toBeCloseTo(far.force[i]!, 9))
+              near.moment.forEach((value, i) => expect(value).toBeCloseTo(far.moment[i]!, 9))
+            }
+          }
+        }
+      }),
+      RUNS,
+    )
+  })
+})
+
+describe('left and right', () => {
+  const name = { left: 'right', right: 'left' } as const
+
+  it('are mirror images when both sides work', () => {
+    const both = solved.filter(({ mechanics }) => mechanics.sides === 'both')
+    fc.assert(
+      fc.property(both, ({ solution }) => {
+        for (const { pose } of solution.frames) {
+          for (const [point, [x, y, z]] of Object.entries(pose)) {
+            const [side, joint] = point.split('.') as ['left' | 'right', string]
+            const twin = joint === undefined ? point : `${name[side]}.${joint}`
+            const [tx, ty, tz] = pose[twin as keyof typeof pose]
+            expect([x, y, z]).toEqual([tx, expect.closeTo(-ty, 12), tz])
+          }
+        }
+      }),
+      RUNS,
+    )
+  })
+
+  it('are asked the same when the idle side does what the working side does', () => {
+    // Pads hold the trunk, so that the two sides meet only there; the load is held in both hands.
+    const twoHanded = solved.filter(
+      ({ mechanics }) => mechanics.supports.includes('seat') || mechanics.supports.includes('chestPad'),
+    )
+    fc.assert(
+      fc.property(twoHanded, fc.constantFrom('flexed', 'reversed', 'across'), ({ mechanics }, elbowSide) => {
+        const frames = mechanics.frames.map((frame): Frame => {
+          const arms = { ...frame.arms, elbowSide: elbowSide as 'flexed' }
+          return { ...frame, arms, offArm: arms, offLeg: frame.legs }
+        })
+        const held = (at: 'hands' | 'offHand') => ({ at, direction: { angle: 250 } })
+        const solution = trySolve(
+          {
+            ...mechanics,
+            sides: 'oneAtATime',
+            frames,
+            loads: [held('hands'), held('offHand')],
+            moments: [],
+            balance: undefined,
+          },
+          'male',
+        )
+        fc.pre('frames' in solution)
+        for (const frame of solution.frames) {
+          const of = (role: Term['role']) => frame.terms.filter((term) => term.role === role)
+          expect(of('working').length).toBeGreaterThan(4)
+          expect(of('idle').map(({ axis }) => axis)).toEqual(of('working').map(({ axis }) => axis))
+          of('idle').forEach((term, i) => {
+            expect(term.a, term.axis).toBeCloseTo(of('working')[i]!.a, 12)
+            expect(term.b, term.axis).toBeCloseTo(of('working')[i]!.b, 12)
+          })
+        }
+      }),
+      RUNS,
+    )
+  })
+})
+
+describe('places', () => {
+  it('a hand or foot stands where it was asked to', () => {
+    fc.assert(
+      fc.property(solved, ({ mechanics, solution }) => {
+        mechanics.frames.forEach((frame, index) => {
+          const { pose, angles } = solution.frames[index]!
+          const from = (a: Vector, b: Vector): Vector => [b[0] - a[0], b[1] - a[1], b[2] - a[2]]
+          const hand = from(pose['right.shoulder'], pose['right.grip'])
+          // Balancing with the arms or legs turns the place itself.
+          if ('hand' in frame.arms && mechanics.balance?.solve !== 'arms') {
+            const [u, v, w = 0] = frame.arms.hand
+            const lean = ((angles.trunkLean + angles.lumbar) * Math.PI) / 180
+            const [up, forward, outward]: Vector[] = [
+              [Math.sin(lean), 0, Math.cos(lean)],
+              [Math.cos(lean), 0, -Math.sin(lean)],
+              [0, -1, 0],
+            ]
+            const sum = (parts: [number, Vector][]) =>
+              [0, 1, 2].map((i) => parts.reduce((total, [k, d]) => total + k * d[i]!, 0))
+            const world = frame.arms.from === 'world'
+            const wanted = {
+              sagittal: world
+                ? [u, 0, v]
+                : sum([
+                    [-u, up!],
+                    [v, forward!],
+                    [w, outward!],
+                  ]),
+              frontal: world
+                ? [w, -u, v]
+                : sum([
+                    [-u, up!],
+                    [v, outward!],
+                    [w, forward!],
+                  ]),
+              transverse: world
+                ? [w, -u, v]
+                : sum([
+                    [u, outward!],
+                    [v, forward!],
+                    [w, up!],
+                  ]),
+            }[mechanics.armPlane]
+            // A sagittal arm in world axes has only two numbers.
+            wanted.forEach((value, i) => expect(hand[i]).toBeCloseTo(value, 9))
+          }
+          if ('ankle' in frame.legs && Array.isArray(frame.legs.ankle) && mechanics.balance?.solve !== 'legs') {
+            const ankle = from(pose['right.hip'], pose['right.ankle'])
+            expect(Math.hypot(ankle[0], ankle[2])).toBeCloseTo(Math.hypot(...frame.legs.ankle), 9)
+            if (!('from' in frame.legs) || frame.legs.from !== 'trunk') {
+              expect(ankle[0]).toBeCloseTo(frame.legs.ankle[0]!, 9)
+              expect(ankle[2]).toBeCloseTo(frame.legs.ankle[1]!, 9)
+            }
+          }
+        })
+      }),
+      RUNS,
+    )
+  })
+
+  it('nothing lies below the ground, and the bearing point stays where it is', () => {
+    fc.assert(
+      fc.property(solved, ({ solution }) => {
+        for (const { pose } of solution.frames) {
+          for (const [, , z] of Object.values(pose)) expect(z).toBeGreaterThan(-1e-9)
+        }
+        const anchors = solution.frames.map((frame) => frame.reactions.at(-1)?.at)
+        if (anchors[0])
+          anchors.forEach((at) =>
+            expect([at![0], at![2]]).toEqual([expect.closeTo(0, 9), expect.closeTo(anchors[0]![2], 9)]),
+          )
+      }),
+      RUNS,
+    )
+  })
+})
+
+describe('twins', () => {
+  // A pulldown at body weight is the pull-up seen from the bar: same hand force, same arms, same lean.
+  it('the arms of a pull-up and of a pulldown at the same hand force are asked the same', () => {
+    const pullUp = solveExercise(hang(), 'male')
+    const frames = pulldown().frames.map((frame, index) => ({
+      ...frame,
+      trunk: { lean: pullUp.frames[index]!.angles.trunkLean },
+    }))
+    const seated = solveExercise(pulldown({ frames }), 'male')
+    pullUp.frames.forEach((frame, index) => {
+      const arm = frame.terms.filter(
+        ({ axis, role }) => role === 'working' && /^(grip|wrist|elbow|shoulder|scapula|hand)/.test(axis),
+      )
+      expect(arm.length).toBeGreaterThanOrEqual(6)
+      for (const term of arm) {
+        const twin = seated.frames[index]!.terms.find(({ axis, role }) => axis === term.axis && role === 'working')!
+        // The pulldown's load is the body's mass.
+        expect(twin.a + twin.b, term.axis).toBeCloseTo(term.a, 9)
+      }
+    })
+  })
+})
+
+describe('the body', () => {
+  it.each(SEXES)('of %s weighs what it weighs and stands as tall as it stands', (sex) => {
+    const table = SEGMENTS[sex]
+    const paired = [table.upperArm, table.forearm, table.hand, table.thigh, table.shank, table.foot]
+    const single = [table.head, table.upperTrunk, table.pelvis]
+    const mass = paired.reduce((sum, { mass }) => sum + 2 * mass, 0) + single.reduce((sum, { mass }) => sum + mass, 0)
+    expect(mass).toBeCloseTo(1, 3)
+    const tall =
+      table.ankleHeight +
+      table.shank.length +
+      table.thigh.length +
+      table.pelvis.length +
+      table.upperTrunk.length +
+      table.head.length
+    expect(tall).toBeCloseTo(1, 12)
+    for (const segment of [...paired, table.head, table.upperTrunk]) {
+      expect(segment.centre).toBeGreaterThan(0)
+      expect(segment.centre).toBeLessThan(segment.length)
+    }
+  })
+
+  // de Leva 1996 (F): the whole trunk's mass centre at 43.10 % (men), 37.82 % (women) from mid-shoulder to mid-hip.
+  it.each([
+    ['male', 0.431, 515.5 / 1741],
+    ['female', 0.3782, 497.9 / 1735],
+  ] as const)('of %s keeps the mass centre of the whole trunk where de Leva has it', (sex, share, trunk) => {
+    const { upperTrunk, pelvis } = SEGMENTS[sex]
+    const height = upperTrunk.mass * (pelvis.length + upperTrunk.centre) + pelvis.mass * pelvis.centre
+    expect(pelvis.length + upperTrunk.length).toBeCloseTo(trunk, 12)
+    expect(height / (upperTrunk.mass + pelvis.mass)).toBeCloseTo((1 - share) * trunk, 12)
+  })
+
+  it('is the same however often it is solved', () => {
+    for (const mechanics of Object.values(MECHANICS_CASES)) {
+      expect(solveExercise(mechanics, 'female')).toEqual(solveExercise(structuredClone(mechanics), 'female'))
+    }
+  })
+})
