@@ -68,6 +68,12 @@ describe('demo accounts', () => {
     expect(screen.getByRole('button', { name: 'Sign in' })).toHaveFocus()
   })
 
+  it('are listed once for each person, with all their clubs', async () => {
+    open({ 'GET /api/auth/demo-accounts': aList(demo, { ...demo, clubName: 'Saltmarsh' }) })
+    expect(await screen.findByText('Quarry Lane, Saltmarsh')).toBeInTheDocument()
+    expect(screen.getAllByRole('button', { name: /Ilse Tamm/ })).toHaveLength(1)
+  })
+
   it('are not spoken of outside a demo', async () => {
     const { api } = open()
     await waitFor(() => expect(api.sent).toHaveLength(1))

@@ -3,6 +3,19 @@ import type { DemoAccount } from '#shared/contract/auth'
 import { ROLE_WORDS } from '@/lib/words'
 import { demoAccountsQuery } from '../api'
 
+/** One entry for each person, with all their clubs. */
+function byPerson(accounts: readonly DemoAccount[]): DemoAccount[] {
+  const people = new Map<string, DemoAccount>()
+  for (const account of accounts) {
+    const before = people.get(account.email)
+    people.set(
+      account.email,
+      before === undefined ? account : { ...account, clubName: `${before.clubName}, ${account.clubName}` },
+    )
+  }
+  return [...people.values()]
+}
+
 /** Invented people anybody may be; nothing stands here outside a demo, and nothing is missed when it cannot be loaded. */
 export function DemoAccounts({ onChoose }: { onChoose: (account: DemoAccount) => void }) {
   const { data } = useQuery(demoAccountsQuery())
@@ -16,7 +29,7 @@ export function DemoAccounts({ onChoose }: { onChoose: (account: DemoAccount) =>
         The people and clubs are invented. Choose one and the form is filled in.
       </p>
       <ul className="grid gap-2 sm:grid-cols-2">
-        {data.items.map((account) => (
+        {byPerson(data.items).map((account) => (
           <li key={account.email}>
             <button
               type="button"
