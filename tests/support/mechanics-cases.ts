@@ -331,8 +331,8 @@ export const legPress = (): ExerciseMechanics => ({
   loads: [{ at: 'feet', direction: { angle: 225 }, ratio: 0.7 }],
   referenceLoad: 1.2,
   frames: [
-    { name: 'deep', trunk: { lean: -45 }, arms: { shoulder: 10, elbow: 20 }, legs: { ankle: [0.25, 0.2], foot: -45 } },
-    { name: 'long', trunk: { lean: -45 }, arms: { shoulder: 10, elbow: 20 }, legs: { ankle: [0.33, 0.3], foot: -45 } },
+    { name: 'deep', trunk: { lean: -45 }, arms: { shoulder: 10, elbow: 20 }, legs: { ankle: [0.17, 0.25], foot: -135 } },
+    { name: 'long', trunk: { lean: -45 }, arms: { shoulder: 10, elbow: 20 }, legs: { ankle: [0.22, 0.37], foot: -135 } },
   ],
 })
 
