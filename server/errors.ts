@@ -23,3 +23,10 @@ export class AppError extends Error {
 
 /** The answer for a row that is not there, or that the actor may not know of: both look alike. */
 export const notFound = (what = 'That') => new AppError('not_found', `${what} was not found.`)
+
+/** An error in words for a terminal. Node reports a refused connection as several errors under an empty message. */
+export function explain(error: unknown): string {
+  if (error instanceof AggregateError && error.errors.length > 0)
+    return [...new Set(error.errors.map(explain))].join('; ')
+  return error instanceof Error && error.message !== '' ? error.message : String(error)
+}

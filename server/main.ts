@@ -4,6 +4,7 @@ import type { Express } from 'express'
 import { createApp } from './app'
 import { createDependencies, type Dependencies } from './dependencies'
 import { parseEnv, publicUrl, type Env } from './env'
+import { explain } from './errors'
 import { demoAccounts } from './features/auth/demo-accounts'
 import type { MailFake } from './mail/fake/start'
 
@@ -77,6 +78,6 @@ async function main(): Promise<void> {
 }
 
 main().catch((error: unknown) => {
-  process.stderr.write(`${error instanceof Error ? error.message : String(error)}\n`)
+  process.stderr.write(`${explain(error)}\n`)
   process.exit(1)
 })

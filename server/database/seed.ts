@@ -1,4 +1,5 @@
 /** Entry of the start command: brings the database to the newest schema and fills it. Safe to run again. */
+import { explain } from '../errors'
 import { Catalogue } from '../features/exercises/catalogue'
 import { createDataSource } from './data-source'
 import { seedCatalogue } from './seed-catalogue'
@@ -24,8 +25,6 @@ async function main(): Promise<void> {
 }
 
 main().catch((error: unknown) => {
-  process.stderr.write(
-    `The database could not be prepared: ${error instanceof Error ? error.message : String(error)}\n`,
-  )
+  process.stderr.write(`The database could not be prepared: ${explain(error)}\n`)
   process.exit(1)
 })

@@ -8,7 +8,9 @@ require_node
 load_env_file
 ensure_dependencies
 ensure_secrets
-: "${NODE_ENV:=production}" "${PINTLE_DEMO:=true}" "${SMTP_URL:=local}" "${LOG_LEVEL:=warn}"
+# The demo's passwords are public, so it is not for an address that the world can reach.
+case ${PUBLIC_URL:-} in https:*) : "${PINTLE_DEMO:=false}" ;; *) : "${PINTLE_DEMO:=true}" ;; esac
+: "${NODE_ENV:=production}" "${SMTP_URL:=local}" "${LOG_LEVEL:=warn}"
 export NODE_ENV PINTLE_DEMO SMTP_URL LOG_LEVEL
 ensure_database
 ensure_build
