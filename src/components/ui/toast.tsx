@@ -1,6 +1,6 @@
 import { X } from 'lucide-react'
 import * as Radix from 'radix-ui/toast'
-import { createContext, useCallback, useContext, useState, type ReactNode } from 'react'
+import { createContext, useCallback, useContext, useRef, useState, type ReactNode } from 'react'
 import { Icon } from './icon'
 
 export interface ToastMessage {
@@ -13,7 +13,7 @@ interface Shown extends ToastMessage {
 }
 const ToastContext = createContext<((message: ToastMessage) => void) | null>(null)
 
-/** Shows a short message that goes by itself; with an action it stays longer. */
+/** Shows a short message that goes by itself, in the place of the one before; with an action it stays longer. */
 export function useToast(): (message: ToastMessage) => void {
   const show = useContext(ToastContext)
   if (show === null) throw new Error('useToast needs a ToastProvider around it.')
@@ -21,30 +21,31 @@ export function useToast(): (message: ToastMessage) => void {
 }
 
 export function ToastProvider({ children }: { children: ReactNode }) {
-  const [shown, setShown] = useState<Shown[]>([])
-  const show = useCallback(
-    (message: ToastMessage) =>
-      setShown((before) => [...before.slice(-2), { ...message, key: (before.at(-1)?.key ?? 0) + 1 }]),
-    [],
-  )
-  const remove = (key: number) => setShown((before) => before.filter((toast) => toast.key !== key))
+  const [shown, setShown] = useState<Shown | null>(null)
+  /** Never used twice, so that an older message that closes late does not take a newer one with it. */
+  const lastKey = useRef(0)
+  const show = useCallback((message: ToastMessage) => {
+    lastKey.current += 1
+    setShown({ ...message, key: lastKey.current })
+  }, [])
+  const remove = (key: number) => setShown((now) => (now?.key === key ? null : now))
   return (
     <ToastContext value={show}>
       <Radix.Provider label="Message" swipeDirection="down">
         {children}
-        {shown.map((toast) => (
+        {shown !== null && (
           <Radix.Root
-            key={toast.key}
-            type={toast.action === undefined ? 'background' : 'foreground'}
-            duration={toast.action === undefined ? 6_000 : 12_000}
-            onOpenChange={(open) => !open && remove(toast.key)}
+            key={shown.key}
+            type={shown.action === undefined ? 'background' : 'foreground'}
+            duration={shown.action === undefined ? 6_000 : 12_000}
+            onOpenChange={(open) => !open && remove(shown.key)}
             className="flex items-center gap-3 rounded-lg border border-edge bg-card py-1 pr-1 pl-4 shadow-lg"
           >
-            <Radix.Description className="flex-1 py-2">{toast.text}</Radix.Description>
-            {toast.action !== undefined && (
-              <Radix.Action asChild altText={toast.action.label}>
-                <button type="button" onClick={toast.action.run} className="min-h-target px-3 font-semibold link">
-                  {toast.action.label}
+            <Radix.Description className="flex-1 py-2">{shown.text}</Radix.Description>
+            {shown.action !== undefined && (
+              <Radix.Action asChild altText={shown.action.label}>
+                <button type="button" onClick={shown.action.run} className="min-h-target px-3 font-semibold link">
+                  {shown.action.label}
                 </button>
               </Radix.Action>
             )}
@@ -53,7 +54,7 @@ export function ToastProvider({ children }: { children: ReactNode }) {
               <span className="sr-only">Close this message</span>
             </Radix.Close>
           </Radix.Root>
-        ))}
+        )}
         <Radix.Viewport
           label="Messages ({hotkey})"
           className="fixed inset-x-4 bottom-20 z-60 mx-auto flex max-w-md flex-col gap-2 outline-none md:bottom-6"

@@ -4,7 +4,7 @@ import { Link } from 'react-router-dom'
 import type { ExerciseDocument } from '#shared/contract/exercise'
 import type { Slot } from '#shared/contract/session'
 import { paths } from '@/app/paths'
-import { Button } from '@/components/ui/button'
+import { Button, LinkButton } from '@/components/ui/button'
 import { Card } from '@/components/ui/card'
 import { Icon } from '@/components/ui/icon'
 import { formatDose, formatOverCap } from '@/lib/format'
@@ -67,11 +67,17 @@ function Actions({ slot, name, onUndo, undoing }: SlotCardProps & { name: string
   if ((!can.swap || stopped) && undo === null) return null
   return (
     <div className="-mb-2 flex flex-wrap items-center gap-x-5 sm:mb-0 sm:flex-col sm:items-end sm:justify-center">
-      {can.swap && !stopped && (
-        <Link to={paths.slotSwaps(slot.id)} className="inline-flex min-h-target items-center font-semibold link">
-          See swaps <span className="sr-only">for {name}</span>
-        </Link>
-      )}
+      {can.swap &&
+        !stopped &&
+        (affected.length > 0 ? (
+          <LinkButton to={paths.slotSwaps(slot.id)} kind="primary" className="my-2 max-sm:w-full">
+            <SeeSwaps name={name} />
+          </LinkButton>
+        ) : (
+          <Link to={paths.slotSwaps(slot.id)} className="inline-flex min-h-target items-center font-semibold link">
+            <SeeSwaps name={name} />
+          </Link>
+        ))}
       {undo !== null && (
         <Button
           kind="quiet"
@@ -87,3 +93,9 @@ function Actions({ slot, name, onUndo, undoing }: SlotCardProps & { name: string
     </div>
   )
 }
+
+const SeeSwaps = ({ name }: { name: string }) => (
+  <span>
+    See swaps <span className="sr-only">for {name}</span>
+  </span>
+)

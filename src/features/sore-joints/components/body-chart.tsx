@@ -10,7 +10,7 @@ export interface JointChoice {
 type View = 'front' | 'back'
 
 /** viewBox of one figure. */
-const BOX = { left: -92, top: 2, width: 184, height: 400 }
+const BOX = { left: -92, top: 2, width: 184, height: 404 }
 
 /** Where the joints lie: distance from the midline, and height. */
 const PAIRED: ReadonlyArray<[Joint, number, number]> = [
