@@ -1,68 +1,84 @@
 import { LRUCache } from 'lru-cache'
 import type { Exercise, ExerciseDocument } from '#shared/contract/exercise'
 import type { RuleSet } from '#shared/contract/rule-set'
+import type { ExerciseMechanics } from '#shared/mechanics/definition'
 import type { Sex } from '#shared/mechanics/sex'
 import type { ExerciseSolution } from '#shared/mechanics/solution'
 import { musclesOf, type Candidate } from '#shared/rules/index'
-import { unpackSolution, type PackedSolution } from './packed-solution'
+import { BlockStore, type Block } from './block-store'
+import { unpackSolution } from './packed-solution'
 
-/** A published version as it is kept: bytes, since a long catalogue of live objects would fill the memory. */
+/** A document without its geometry. */
+export type DocumentHead = Omit<ExerciseDocument, 'mechanics'>
+
+const parse = <T>(bytes: Buffer): T => JSON.parse(bytes.toString('utf8')) as T
+
+/** The bytes of a catalogue and what was last read from them; carried on from one edition to the next. */
+export class CatalogueBlocks {
+  readonly heads = new BlockStore<DocumentHead>(parse)
+  readonly mechanics = new BlockStore<ExerciseMechanics>(parse)
+  readonly solutions = new BlockStore<ExerciseSolution>(unpackSolution)
+}
+
+/** A published version as it is kept. */
 export interface KeptVersion {
   id: string
   versionId: string
   coordination: number
-  /** The document's JSON. */
-  document: Buffer
+  head: Block
+  mechanics: Block
 }
 
-/** Versions whose objects stay alive once they were read: all of an ordinary catalogue. */
-const ALIVE = 400
-
-/** Reads a version's bytes when somebody looks at it, and remembers what was looked at last. */
+/** Reads a version's bytes when somebody looks at it. */
 class KeptCandidate implements Candidate {
-  readonly id: string
-  readonly versionId: string
-  readonly coordination: number
-
   constructor(
     private readonly kept: KeptVersion,
-    private readonly packed: PackedSolution,
+    private readonly solved: Block,
+    private readonly blocks: CatalogueBlocks,
     private readonly documents: LRUCache<string, ExerciseDocument>,
-    private readonly solutions: LRUCache<string, ExerciseSolution>,
-  ) {
-    this.id = kept.id
-    this.versionId = kept.versionId
-    this.coordination = kept.coordination
+  ) {}
+
+  get id(): string {
+    return this.kept.id
+  }
+
+  get versionId(): string {
+    return this.kept.versionId
+  }
+
+  get coordination(): number {
+    return this.kept.coordination
   }
 
   get document(): ExerciseDocument {
     const known = this.documents.get(this.versionId)
     if (known !== undefined) return known
-    const read = JSON.parse(this.kept.document.toString('utf8')) as ExerciseDocument
-    this.documents.set(this.versionId, read)
-    return read
+    const head = this.blocks.heads.open(this.kept.head)
+    const document = { ...head, mechanics: this.blocks.mechanics.open(this.kept.mechanics) }
+    this.documents.set(this.versionId, document)
+    return document
   }
 
   get solution(): ExerciseSolution {
-    const known = this.solutions.get(this.versionId)
-    if (known !== undefined) return known
-    const read = unpackSolution(this.packed)
-    this.solutions.set(this.versionId, read)
-    return read
+    return this.blocks.solutions.open(this.solved)
   }
 }
 
+/** Documents and muscles that stay at hand: all of an ordinary catalogue. */
+const AT_HAND = 400
+
 /** All published exercises and the active rules at one moment, with the coefficients of the sexes asked for so far. */
 export class CatalogueEdition {
-  private readonly documents = new LRUCache<string, ExerciseDocument>({ max: ALIVE })
+  private readonly documents = new LRUCache<string, ExerciseDocument>({ max: AT_HAND })
   private readonly bySex = new Map<Sex, ReadonlyMap<string, Candidate>>()
   /** Which muscles an exercise drives follows from its version and the rules alone. */
-  private readonly muscles = new LRUCache<string, Exercise['muscles']>({ max: ALIVE })
+  private readonly muscles = new LRUCache<string, Exercise['muscles']>({ max: AT_HAND })
 
   constructor(
     readonly revision: number,
     readonly ruleSet: RuleSet,
     readonly versions: ReadonlyMap<string, KeptVersion>,
+    private readonly blocks: CatalogueBlocks,
   ) {}
 
   has(sex: Sex): boolean {
@@ -70,12 +86,11 @@ export class CatalogueEdition {
   }
 
   /** Adds the coefficients for a sex, by version. */
-  add(sex: Sex, packed: ReadonlyMap<string, PackedSolution>): void {
-    const solutions = new LRUCache<string, ExerciseSolution>({ max: ALIVE })
+  add(sex: Sex, solutions: ReadonlyMap<string, Block>): void {
     const candidates = new Map<string, Candidate>()
     for (const [id, kept] of this.versions) {
-      const own = packed.get(kept.versionId)
-      if (own !== undefined) candidates.set(id, new KeptCandidate(kept, own, this.documents, solutions))
+      const solved = solutions.get(kept.versionId)
+      if (solved !== undefined) candidates.set(id, new KeptCandidate(kept, solved, this.blocks, this.documents))
     }
     this.bySex.set(sex, candidates)
   }

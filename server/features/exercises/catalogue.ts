@@ -3,8 +3,9 @@ import { ruleSet as ruleSetSchema } from '#shared/contract/rule-set'
 import type { Sex } from '#shared/mechanics/sex'
 import type { ExerciseSolution } from '#shared/mechanics/solution'
 import { AppError } from '../../errors'
-import { CatalogueEdition, type KeptVersion } from './catalogue-edition'
-import { packSolution, type PackedSolution } from './packed-solution'
+import type { Block } from './block-store'
+import { CatalogueBlocks, CatalogueEdition, type KeptVersion } from './catalogue-edition'
+import { packSolution } from './packed-solution'
 
 /** Which catalogue and which rules an answer is made from; selected together with an answer's other inputs. */
 export interface Edition {
@@ -31,7 +32,8 @@ const inBatches = <T>(items: readonly T[]): T[][] =>
 export class Catalogue {
   private current: CatalogueEdition | null = null
   private loading: Promise<CatalogueEdition> | null = null
-  private readonly packed = new Map<Sex, ReadonlyMap<string, PackedSolution>>()
+  private readonly blocks = new CatalogueBlocks()
+  private readonly solved = new Map<Sex, ReadonlyMap<string, Block>>()
   private readonly packing = new Map<string, Promise<void>>()
 
   constructor(private readonly dataSource: DataSource) {}
@@ -66,9 +68,12 @@ export class Catalogue {
       )
       if (state.ruleSetVersion === null) throw new AppError('unavailable', 'No rule set is active yet. Try again soon.')
       const versions = await this.loadVersions(manager)
-      return new CatalogueEdition(state.revision, ruleSetSchema.parse(state.rules), versions)
+      return new CatalogueEdition(state.revision, ruleSetSchema.parse(state.rules), versions, this.blocks)
     })
     this.current = edition
+    const versions = [...edition.versions.values()]
+    this.blocks.heads.retain(new Set(versions.map(({ head }) => head)))
+    this.blocks.mechanics.retain(new Set(versions.map(({ mechanics }) => mechanics)))
     return edition
   }
 
@@ -85,15 +90,20 @@ export class Catalogue {
         return version?.versionId === versionId ? [version] : []
       })
       const missing = batch.filter(({ id }) => !known.some((version) => version.id === id))
-      const rows: Array<Omit<KeptVersion, 'document'> & { document: string }> =
+      const rows: Array<Record<'id' | 'versionId' | 'head' | 'mechanics', string> & { coordination: number }> =
         missing.length === 0
           ? []
           : await manager.query(
-              `select v.exercise_id as id, v.id as "versionId", v.coordination, v.document::text as document
+              `select v.exercise_id as id, v.id as "versionId", v.coordination,
+                      (v.document - 'mechanics')::text as head, (v.document -> 'mechanics')::text as mechanics
                  from exercise_versions v where v.id = any($1::uuid[])`,
               [missing.map(({ versionId }) => versionId)],
             )
-      const read = rows.map((row) => ({ ...row, document: Buffer.from(row.document) }))
+      const read = rows.map(({ head, mechanics, ...row }) => ({
+        ...row,
+        head: this.blocks.heads.keep(Buffer.from(head)),
+        mechanics: this.blocks.mechanics.keep(Buffer.from(mechanics)),
+      }))
       const byId = new Map([...known, ...read].map((version) => [version.id, version]))
       for (const { id } of batch) {
         const version = byId.get(id)
@@ -113,8 +123,8 @@ export class Catalogue {
   }
 
   private async pack(edition: CatalogueEdition, sex: Sex): Promise<void> {
-    const known = this.packed.get(sex)
-    const packed = new Map<string, PackedSolution>()
+    const known = this.solved.get(sex)
+    const solved = new Map<string, Block>()
     for (const batch of inBatches([...edition.versions.values()])) {
       const missing = batch.filter(({ versionId }) => !known?.has(versionId)).map(({ versionId }) => versionId)
       const rows: Array<{ versionId: string; solution: ExerciseSolution }> =
@@ -125,13 +135,16 @@ export class Catalogue {
                  from exercise_versions v where v.id = any($1::uuid[])`,
               [missing, sex],
             )
-      for (const { versionId, solution } of rows) packed.set(versionId, packSolution(solution))
+      for (const { versionId, solution } of rows) {
+        solved.set(versionId, this.blocks.solutions.keep(packSolution(solution)))
+      }
       for (const { versionId } of batch) {
         const kept = known?.get(versionId)
-        if (kept !== undefined) packed.set(versionId, kept)
+        if (kept !== undefined) solved.set(versionId, kept)
       }
     }
-    this.packed.set(sex, packed)
-    edition.add(sex, packed)
+    this.solved.set(sex, solved)
+    this.blocks.solutions.retain(new Set([...this.solved.values()].flatMap((blocks) => [...blocks.values()])))
+    edition.add(sex, solved)
   }
 }
