@@ -1,10 +1,7 @@
-import { existsSync, readdirSync, readFileSync } from 'node:fs'
 import fc from 'fast-check'
-import { parse } from 'yaml'
 import { describe, expect, it } from 'vitest'
-import type { ExerciseDocument } from '#shared/contract/exercise'
-import { exerciseDocument } from '#shared/contract/exercise'
 import { SEXES, SEGMENTS, solveExercise, type ExerciseMechanics } from '#shared/mechanics/index'
+import { documents } from '#tests/seeds/catalogue'
 import { solvable } from '#tests/support/mechanics-arbitrary'
 import { curl, MECHANICS_CASES } from '#tests/support/mechanics-cases'
 import { rig } from '#tests/support/mujoco'
@@ -15,14 +12,6 @@ import { linkedBody } from '#tests/support/mujoco-body'
  * Source of truth: MuJoCo 3.14 (@mujoco/mujoco), a general-purpose physics engine. It is given the segments, the joint angles, the
  * weights and the support forces, and says by inverse dynamics which torque each hinge needs to stay still.
  */
-
-const CATALOGUE = 'seeds/catalogue'
-const catalogue: ExerciseDocument[] = existsSync(CATALOGUE)
-  ? readdirSync(CATALOGUE)
-      .filter((file) => file.endsWith('.yaml'))
-      .flatMap((file) => parse(readFileSync(`${CATALOGUE}/${file}`, 'utf8')) as unknown[])
-      .map((entry) => exerciseDocument.parse(entry))
-  : []
 
 /** The same athletes and loads on every run: one for each sex, drawn anew for each exercise. */
 function trials(seed: string): Trial[] {
@@ -130,10 +119,10 @@ describe('joint moments agree with MuJoCo for any definition that can be held', 
 
 describe('joint moments agree with MuJoCo for the catalogue', () => {
   it('has exercises', () => {
-    expect(catalogue.length).toBeGreaterThan(0)
+    expect(documents.size).toBeGreaterThan(0)
   })
 
-  it.each(catalogue.map((entry) => [entry.slug, entry.mechanics] as const))('%s', (slug, mechanics) => {
+  it.each([...documents.values()].map(({ slug, mechanics }) => [slug, mechanics] as const))('%s', (slug, mechanics) => {
     expectAgreement(slug, mechanics)
   })
 })
