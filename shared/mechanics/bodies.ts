@@ -23,6 +23,14 @@ export interface SegmentRef {
   name: SegmentName
   limb?: LimbIndex
 }
+/** Every segment of the body. */
+export const ALL_SEGMENTS: readonly SegmentRef[] = SEGMENT_NAMES.flatMap((name): SegmentRef[] =>
+  name === 'pelvis' || name === 'upperTrunk' || name === 'head'
+    ? [{ name }]
+    : ([0, 1] as const).map((limb) => ({ name, limb })),
+)
+
+/** A segment with its share of body mass and its mass centre. */
 export interface SegmentBody extends SegmentRef {
   mass: number
   centre: Vector

@@ -2,20 +2,25 @@ import { SOLVABLE } from './contacts'
 import type { ExerciseMechanics } from './definition'
 import { MechanicsError } from './errors'
 
+function finite(value: unknown): boolean {
+  if (typeof value === 'number') return Number.isFinite(value)
+  if (typeof value !== 'object' || value === null) return true
+  for (const key in value) if (!finite((value as Record<string, unknown>)[key])) return false
+  return true
+}
+
 /**
  * Refuses the first number that is not finite, anywhere inside a value.
  * @param field dotted path of the value
  * @throws MechanicsError bad_number with the number's own path, or with `field` when `message` is given
  */
 export function checkNumbers(value: unknown, field: string, message?: string): void {
-  if (typeof value === 'number') {
-    if (!Number.isFinite(value)) throw new MechanicsError('bad_number', field, message ?? 'Give a finite number.')
-    return
-  }
-  if (typeof value !== 'object' || value === null) return
-  for (const [key, inner] of Object.entries(value)) {
-    checkNumbers(inner, message !== undefined ? field : field === '' ? key : `${field}.${key}`, message)
-  }
+  if (finite(value)) return
+  if (message !== undefined) throw new MechanicsError('bad_number', field, message)
+  if (typeof value === 'number') throw new MechanicsError('bad_number', field, 'Give a finite number.')
+  // Only now is it worth knowing where.
+  for (const [key, inner] of Object.entries(value as object))
+    checkNumbers(inner, field === '' ? key : `${field}.${key}`)
 }
 
 const refuse = (field: string, message: string): never => {

@@ -1,4 +1,4 @@
-import type { LimbIndex, SegmentRef } from './bodies'
+import { ALL_SEGMENTS, type LimbIndex, type SegmentRef } from './bodies'
 import type { ExerciseMechanics } from './definition'
 import type { SolvedLeg } from './leg'
 import type { Posture } from './posture'
@@ -77,8 +77,8 @@ export const rests = (mechanics: ExerciseMechanics): boolean =>
  * Segments whose load on a pad, or on a contact beside a pad, cannot be told from statics.
  * Legs that push a load away with their feet lift off the seat: then it holds the pelvis alone.
  */
-export function restingSegments(mechanics: ExerciseMechanics): (segment: SegmentRef) => boolean {
-  if (!rests(mechanics)) return () => false
+export function heldSegments(mechanics: ExerciseMechanics): SegmentRef[] {
+  if (!rests(mechanics)) return []
   const legsPush = mechanics.loads.some((load) => load.at === 'feet')
   const groups = mechanics.supports.map((support): ((segment: SegmentRef) => boolean) => {
     const names = support === 'seat' && legsPush ? RESTING.seat?.filter((name) => name !== 'thigh') : RESTING[support]
@@ -87,7 +87,7 @@ export function restingSegments(mechanics: ExerciseMechanics): (segment: Segment
     const name = BEARING_SEGMENT[support as keyof typeof BEARING_SEGMENT]
     return (segment) => segment.name === name && (segment.limb === undefined || limbs.includes(segment.limb))
   })
-  return (segment) => groups.some((rest) => rest(segment))
+  return ALL_SEGMENTS.filter((segment) => groups.some((rest) => rest(segment)))
 }
 
 const BEARING_SEGMENT = {

@@ -7,14 +7,18 @@ import { add, cross, mean, scale, subtract, ZERO } from './vector'
 
 /** Sum of forces and of their moments about a point. */
 export function wrench(forces: readonly Force[], about: Vector): { force: Vector; moment: Vector } {
-  let force: Vector = ZERO
-  let moment: Vector = ZERO
-  for (const each of forces) {
-    force = add(force, each.force)
-    moment = add(moment, cross(subtract(each.at, about), each.force))
-    if (each.couple) moment = add(moment, each.couple)
+  // Written out: this is the innermost sum of every cut, and vectors made here would be most of the work.
+  let [fx, fy, fz, mx, my, mz] = [0, 0, 0, 0, 0, 0]
+  for (const { at, force, couple } of forces) {
+    const [x, y, z] = [at[0] - about[0], at[1] - about[1], at[2] - about[2]]
+    fx += force[0]
+    fy += force[1]
+    fz += force[2]
+    mx += y * force[2] - z * force[1] + (couple?.[0] ?? 0)
+    my += z * force[0] - x * force[2] + (couple?.[1] ?? 0)
+    mz += x * force[1] - y * force[0] + (couple?.[2] ?? 0)
   }
-  return { force, moment }
+  return { force: [fx, fy, fz], moment: [mx, my, mz] }
 }
 
 /** A reaction on one group, split evenly over its contacts; `couple` is what one point of bearing cannot take alone. */
@@ -65,19 +69,19 @@ export function reactions(groups: readonly ContactGroup[], applied: readonly For
  *
  * Where both limbs do the same (`mirrored`) and pads hold nothing but the two of them, as on a back extension bench, each
  * limb's joint takes half of what the rest of the body asks.
+ * @param held segments that pads hold
  */
 export function cutWrench(
   all: readonly Force[],
-  restsOn: (segment: SegmentRef) => boolean,
-  segments: readonly SegmentRef[],
+  held: readonly SegmentRef[],
   cut: { name: CutName; limb?: LimbIndex; mirrored?: boolean; at: Vector },
 ): { force: Vector; moment: Vector } | undefined {
   const distal = (segment: SegmentRef) => isDistal(segment, cut.name, cut.limb)
-  const heldDistally = segments.some((segment) => restsOn(segment) && distal(segment))
-  const heldProximally = segments.some((segment) => restsOn(segment) && !distal(segment))
+  const heldDistally = held.some(distal)
+  const heldProximally = !held.every(distal)
   if (heldDistally && heldProximally) {
     const ofPair = (segment: SegmentRef) => isDistal(segment, cut.name, 0) || isDistal(segment, cut.name, 1)
-    if (!cut.mirrored || segments.some((segment) => restsOn(segment) && !ofPair(segment))) return undefined
+    if (!cut.mirrored || !held.every(ofPair)) return undefined
     const rest = wrench(
       all.filter((force) => !ofPair(force.segment)),
       [cut.at[0], 0, cut.at[2]],

@@ -1,4 +1,4 @@
-import { roleOf, SEGMENT_NAMES, type CutName, type LimbIndex, type SegmentRef } from './bodies'
+import { roleOf, type CutName, type LimbIndex, type SegmentRef } from './bodies'
 import { flatBack } from './contacts'
 import type { ExerciseMechanics } from './definition'
 import { cutWrench } from './equilibrium'
@@ -17,12 +17,6 @@ export interface ForceSet {
   external: readonly Force[]
 }
 const allOf = ({ weights, external }: ForceSet): Force[] => [...weights, ...external]
-
-const ALL_SEGMENTS: SegmentRef[] = SEGMENT_NAMES.flatMap((name): SegmentRef[] =>
-  name === 'pelvis' || name === 'upperTrunk' || name === 'head'
-    ? [{ name }]
-    : [0, 1].map((limb) => ({ name, limb: limb as LimbIndex })),
-)
 
 interface Cut {
   name: CutName
@@ -124,19 +118,20 @@ function cutsOf(mechanics: ExerciseMechanics, posture: Posture): Cut[] {
  * The muscles' answer at every cut, for gravity (a) and for the load (b).
  * A moment axis answers −(external moment)·direction; of the force axes the scapular ones answer the arm's pull, while
  * `handAxial` and `lumbarAxial` report the external force itself (positive pulls the joint apart).
+ * @param held segments that pads hold
  */
 export function jointTerms(
   mechanics: ExerciseMechanics,
   posture: Posture,
   sets: { body: ForceSet; load: ForceSet },
-  restsOn: (segment: SegmentRef) => boolean,
+  held: readonly SegmentRef[],
 ): Term[] {
   const terms: Term[] = []
   const [bodyForces, loadForces] = [allOf(sets.body), allOf(sets.load)]
   for (const cut of cutsOf(mechanics, posture)) {
     const mirrored = mechanics.sides === 'both' && cut.limb !== undefined
-    const body = cutWrench(bodyForces, restsOn, ALL_SEGMENTS, { ...cut, mirrored })
-    const load = cutWrench(loadForces, restsOn, ALL_SEGMENTS, { ...cut, mirrored })
+    const body = cutWrench(bodyForces, held, { ...cut, mirrored })
+    const load = cutWrench(loadForces, held, { ...cut, mirrored })
     if (!body || !load) continue
     for (const { axis, direction, kind } of cut.read) {
       if (kind === 'moment' && cut.name === 'lumbar' && flatBack(mechanics)) continue

@@ -1,7 +1,7 @@
 import { solveBalance } from './balance'
 import { roleOf } from './bodies'
 import { checkDefinition, checkNumbers } from './check'
-import { restingSegments } from './contacts'
+import { heldSegments } from './contacts'
 import type { ExerciseMechanics } from './definition'
 import { reactions } from './equilibrium'
 import { loadForces } from './loads'
@@ -26,7 +26,7 @@ const CLEARANCE = 0.04
 export function solveExercise(mechanics: ExerciseMechanics, sex: Sex): ExerciseSolution {
   checkDefinition(mechanics)
   const table = SEGMENTS[sex]
-  const restsOn = restingSegments(mechanics)
+  const held = heldSegments(mechanics)
   const frames = mechanics.frames.map((frame, index): SolvedFrame & { anchor: Vector } => {
     const { posture, groups, body, load } = solveBalance(mechanics, frame, table, `frames.${index}`)
     const bodyReactions = reactions(groups, body)
@@ -35,7 +35,7 @@ export function solveExercise(mechanics: ExerciseMechanics, sex: Sex): ExerciseS
       body: { weights: body, external: bodyReactions.flat() },
       load: { weights: [], external: [...load, ...loadReactions.flat()] },
     }
-    const terms = addDirectMoments(mechanics, index, jointTerms(mechanics, posture, sets, restsOn))
+    const terms = addDirectMoments(mechanics, index, jointTerms(mechanics, posture, sets, held))
     const supported: Reaction[] = groups.flatMap((group, g) =>
       group.contacts.map((contact, c) => ({
         support: contact.support,

@@ -93,12 +93,8 @@ describe('worked statics', () => {
   it('a book in the hand: biceps 470 N, elbow 407 N', () => {
     const g = 9.8
     const forces = [down('forearm', [0.16, 0, 0], 2.5 * g), down('hand', [0.38, 0, 0], 4 * g)]
-    const segments: SegmentRef[] = ['upperArm', 'forearm', 'hand'].map((name) => ({ name: name as 'hand', limb: 0 }))
-    const elbow = cutWrench(forces, ({ name }) => name === 'upperArm', segments, {
-      name: 'elbow',
-      limb: 0,
-      at: [0, 0, 0],
-    })!
+    const upperArm: SegmentRef = { name: 'upperArm', limb: 0 }
+    const elbow = cutWrench(forces, [upperArm], { name: 'elbow', limb: 0, at: [0, 0, 0] })!
     const biceps = elbow.moment[1] / 0.04
     expect(biceps).toBeCloseTo(470, -1)
     expect(Math.round(biceps)).toBe(470)
