@@ -1,7 +1,9 @@
 import { useQuery } from '@tanstack/react-query'
-import { useParams } from 'react-router-dom'
+import { Link, useParams } from 'react-router-dom'
+import type { Me } from '#shared/contract/me'
 import type { Session, Today } from '#shared/contract/session'
-import { homeFor } from '@/app/navigation'
+import { homeFor, placesFor } from '@/app/navigation'
+import { paths } from '@/app/paths'
 import { LinkButton } from '@/components/ui/button'
 import { PageHeader } from '@/components/ui/page-header'
 import { EmptyState, Loaded } from '@/components/ui/states'
@@ -18,6 +20,9 @@ import { isApiError } from '@/lib/api-error'
 import { formatDay } from '@/lib/format'
 import { usePerson } from '@/lib/person'
 import { useToday } from '@/lib/use-today'
+
+/** Where this reader has their list of athletes. */
+const listFor = (person: Me) => placesFor(person).find(({ to }) => to === paths.squad() || to === paths.clients())
 
 /** One athlete as their care team sees them: today and the joints, to read. */
 export function Component() {
@@ -42,7 +47,7 @@ export function Component() {
       <Loaded query={query} what="the athlete’s day" skeleton={<SlotsSkeleton />}>
         {(today) => (
           <>
-            <PageHeader title={today.athlete.name} crumb={crumb(today)} />
+            <PageHeader title={today.athlete.name} crumb={<Crumb today={today} />} />
             <div className="grid items-start gap-8 lg:grid-cols-[3fr_2fr]">
               <section aria-label="Today">
                 <h2 className="mb-3 text-xl">Today</h2>
@@ -82,7 +87,21 @@ function ReadSession({ session }: { session: Session }) {
   )
 }
 
-const crumb = ({ day, session }: Today) =>
-  [formatDay(day), session && `${session.title}, ${session.minutes} min`, session?.placeName]
-    .filter(Boolean)
-    .join(' · ')
+/** The way back to the list, and the day. */
+function Crumb({ today: { day, session } }: { today: Today }) {
+  const list = listFor(usePerson())
+  const rest = [formatDay(day), session && `${session.title}, ${session.minutes} min`, session?.placeName]
+  return (
+    <>
+      {list && (
+        <>
+          <Link to={list.to} className="link">
+            {list.label}
+          </Link>
+          {' · '}
+        </>
+      )}
+      {rest.filter(Boolean).join(' · ')}
+    </>
+  )
+}

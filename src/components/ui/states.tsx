@@ -68,17 +68,39 @@ export function FailureState({
 }
 
 interface LoadedProps<T> {
-  query: Pick<UseQueryResult<T>, 'data' | 'isError' | 'error' | 'isFetching'> & { refetch: () => unknown }
+  query: Pick<UseQueryResult<T>, 'data' | 'isError' | 'isRefetchError' | 'error' | 'isFetching'> & {
+    refetch: () => unknown
+  }
   /** What is loading, in words that follow “Loading”. */
   what: string
   skeleton?: ReactNode
   children: (data: T) => ReactNode
 }
 
-/** The three states of every query: loading, failed, there. Older data stays in view when a later fetch fails. */
+/** The states of every query: loading, failed, there. What was there stays in view, and says so, when a later fetch fails. */
 export function Loaded<T>({ query, what, skeleton, children }: LoadedProps<T>) {
-  if (query.data !== undefined) return <>{children(query.data)}</>
-  if (query.isError)
-    return <FailureState error={query.error} retry={() => void query.refetch()} retrying={query.isFetching} />
+  const retry = () => void query.refetch()
+  if (query.data !== undefined)
+    return (
+      <>
+        {query.isRefetchError && <OlderNotice what={what} retry={retry} retrying={query.isFetching} />}
+        {children(query.data)}
+      </>
+    )
+  if (query.isError) return <FailureState error={query.error} retry={retry} retrying={query.isFetching} />
   return <Loading what={what}>{skeleton}</Loading>
+}
+
+function OlderNotice({ what, retry, retrying }: { what: string; retry: () => void; retrying: boolean }) {
+  return (
+    <div
+      role="status"
+      className="mb-3 flex flex-wrap items-center justify-between gap-x-4 rounded-md border border-brass bg-brass-wash px-4 py-1"
+    >
+      <p>This is how {what} stood a while ago; it could not be read again.</p>
+      <Button kind="quiet" className="-mr-4" onClick={retry} busy={retrying} busyLabel="Trying again">
+        Try again
+      </Button>
+    </div>
+  )
 }
