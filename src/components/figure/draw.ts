@@ -7,6 +7,7 @@ import { loadShapes } from './equipment/loads'
 import { bearingHands, bearsOn, handsLieFlat } from './equipment/places'
 import { bearings, padShapes, standOn, upperBackContact, upperBackOn, wall } from './equipment/supports'
 import { boxOf, round, subtract, union, type Box } from './geometry'
+import { MOST_RADIUS } from './marks'
 import type { Shape } from './scene'
 import { block } from './solids'
 import { chooseView, project, type View } from './view'
@@ -25,6 +26,8 @@ export interface Drawing {
 
 /** Room around everything for strokes, discs and rings. */
 const MARGIN = 4
+/** Room around a joint for the largest disc, with the margin. */
+const MARK_ROOM = MOST_RADIUS - MARGIN
 /** What bears higher than this above the floor stands on something; less for the ball of a foot whose heel drops. */
 const RAISED = 0.06
 const STEP = 0.025
@@ -179,4 +182,4 @@ export function drawExercise(mechanics: ExerciseMechanics, frames: readonly Solv
 }
 
 const jointsBox = (view: View, pose: Pose): Box =>
-  boxOf(Object.values(pose).map((place) => ({ ...project(view, place), r: 1 })))
+  boxOf(Object.values(pose).map((place) => ({ ...project(view, place), r: MARK_ROOM })))

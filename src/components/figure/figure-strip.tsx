@@ -25,7 +25,7 @@ export const shownFrames = (count: number): number[] =>
 export function FigureStrip({ name, mechanics, frames, marks = [], tone, className }: FigureStripProps) {
   const drawing = useMemo(() => drawExercise(mechanics, frames), [mechanics, frames])
   return (
-    <ol className={cx('flex items-end gap-2', className)}>
+    <ol className={cx('flex items-start gap-2', className)}>
       {shownFrames(drawing.frames.length).map((index) => {
         const frame = drawing.frames[index]!
         return (

@@ -85,7 +85,7 @@ function Marks({
           cy={y}
           r={disc}
           fill={tone === 'print' ? '#000' : 'var(--oxide)'}
-          fillOpacity={tone === 'print' ? 0.55 : 0.82}
+          fillOpacity={tone === 'print' ? 0.55 : 0.76}
         />
       )}
       {ring !== null && (

@@ -23,11 +23,14 @@ export interface DrawnMark {
 }
 
 /** Radius at the joint's full strength, in hundredths of stature; readable on a 64 px thumbnail. */
-const FULL = 8.5
+const FULL = 8
 /** Past this the disc stops growing; the number beside the figure goes on. */
 const MOST = 1.6
 /** Discs smaller than a pen stroke say nothing. */
 const LEAST = 0.004
+
+/** Radius of the largest disc that is drawn. */
+export const MOST_RADIUS = FULL * Math.sqrt(MOST)
 
 export const discRadius = (share: number): number => round(FULL * Math.sqrt(Math.min(MOST, Math.max(0, share))))
 
@@ -59,10 +62,3 @@ export function drawMarks(view: View, pose: Pose, marks: readonly Mark[]): Drawn
     .sort((a, b) => a.depth - b.depth)
     .map(({ drawn }) => drawn)
 }
-
-/** Largest disc or ring of a set of marks: the room the drawing leaves around joints. */
-export const largestMark = (marks: readonly Mark[]): number =>
-  Math.max(
-    0,
-    ...marks.map(({ stress, cap }) => Math.max(discRadius(stress), cap === null || cap >= 1 ? 0 : discRadius(cap))),
-  )

@@ -117,6 +117,18 @@ describe('drawMarks', () => {
     expect(drawMarks(view, drawn[0]!.pose, [mark({ joint: 'lowerBack', side: null })])).toHaveLength(1)
   })
 
+  it('keeps even the largest disc inside the view box', () => {
+    const [left, top, width, height] = drawExercise(mechanics, frames).viewBox
+    for (const { pose } of drawn)
+      for (const joint of ['neck', 'shoulder', 'elbow', 'wrist', 'lowerBack', 'hip', 'knee', 'ankle'] as const)
+        for (const { x, y, disc } of drawMarks(view, pose, [mark({ joint, side: null, stress: 9 })])) {
+          expect(x - disc).toBeGreaterThanOrEqual(left)
+          expect(x + disc).toBeLessThanOrEqual(left + width)
+          expect(y - disc).toBeGreaterThanOrEqual(top)
+          expect(y + disc).toBeLessThanOrEqual(top + height)
+        }
+  })
+
   it('leaves out joints that are not asked for and have no cap', () => {
     expect(drawMarks(view, drawn[0]!.pose, [mark({ stress: 0, cap: null })])).toHaveLength(0)
   })
