@@ -35,9 +35,9 @@ export function LoadStrip({ label, share, cap = null, kind = 'load', className }
     <div
       role="img"
       aria-label={loadStripText({ label, share, cap, kind })}
-      className={cx('flex items-center gap-2', className)}
+      className={cx('flex items-center gap-1.5', className)}
     >
-      <svg aria-hidden className="block h-4 min-w-10 flex-1 overflow-visible">
+      <svg aria-hidden className="block h-4 w-10 flex-auto overflow-visible">
         {over && (
           <defs>
             <pattern id={id} width="6" height="6" patternUnits="userSpaceOnUse" patternTransform="rotate(45)">
@@ -61,7 +61,7 @@ export function LoadStrip({ label, share, cap = null, kind = 'load', className }
           <rect x={percent(cap)} y="0" width="2" height="16" fill="var(--ink)" transform="translate(-1 0)" />
         )}
       </svg>
-      <span aria-hidden className={cx('min-w-12 text-right whitespace-nowrap', over && 'font-semibold')}>
+      <span aria-hidden className={cx('min-w-11 text-right whitespace-nowrap', over && 'font-semibold')}>
         {formatPercent(share)}
       </span>
     </div>
