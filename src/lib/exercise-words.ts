@@ -113,7 +113,7 @@ export const MUSCLE_WORDS: Record<Muscle, string> = {
   brachialis: 'brachialis',
   brachioradialis: 'brachioradialis',
   triceps: 'triceps',
-  tricepsLongHead: 'triceps, long head',
+  tricepsLongHead: 'triceps long head',
   wristFlexors: 'wrist flexors',
   wristExtensors: 'wrist extensors',
   fingerFlexors: 'finger flexors',

@@ -48,7 +48,7 @@ export function SwapsBody({ query, filters, onFilter, back, between, onTake, tak
   const sex = ranking?.athlete.id === person.id ? person.body?.sex : undefined
   const thumbnailOf = useCallback(
     (id: string, marks: SwapRow['joints'] | undefined) => (
-      <ExerciseThumbnail exercise={exerciseOf(id)} sex={sex} marks={marks} className="h-18 w-14 shrink-0" />
+      <ExerciseThumbnail exercise={exerciseOf(id)} sex={sex} marks={marks} className="size-16 shrink-0" />
     ),
     [exerciseOf, sex],
   )

@@ -8,7 +8,10 @@ import { capitalise, jointWords } from '@/lib/words'
 /** The occupational reference for compression at L5/S1 (NIOSH 1981, from memory), kN; a yardstick, not a limit. */
 const COMPRESSION_REFERENCE = 3.4
 
-/** The hardest each joint is asked for in any posture. */
+/** Less than this rounds to 0 %. */
+const TELLING = 0.005
+
+/** The hardest each joint is asked for in any posture; joints that are asked for nothing are left out. */
 export function hardestStress(preview: Pick<Preview, 'frames'>): JointStress[] {
   const hardest = new Map<string, JointStress>()
   for (const { joints } of preview.frames)
@@ -16,7 +19,7 @@ export function hardestStress(preview: Pick<Preview, 'frames'>): JointStress[] {
       const key = `${stress.joint}.${stress.side ?? ''}`
       if (stress.stress > (hardest.get(key)?.stress ?? -1)) hardest.set(key, stress)
     }
-  return [...hardest.values()].sort((a, b) => b.stress - a.stress)
+  return [...hardest.values()].filter(({ stress }) => stress >= TELLING).sort((a, b) => b.stress - a.stress)
 }
 
 export function JointDemands({ preview, units }: { preview: Preview; units: Units }) {
@@ -49,7 +52,7 @@ export function JointDemands({ preview, units }: { preview: Preview; units: Unit
               ? `with ${formatLoad(preview.oneRepMax, units)} of assistance`
               : formatLoad(preview.oneRepMax, units)}
         </dd>
-        <dt>Lower back, pressed</dt>
+        <dt>Spine compression</dt>
         <dd>
           {compression.toFixed(1)} kN{' '}
           <span className="text-pencil">

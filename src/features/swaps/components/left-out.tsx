@@ -9,8 +9,8 @@ export function LeftOut({ rows }: { rows: readonly LeftOutRow[] }) {
   )
   return (
     <details className="mt-5">
-      <summary className="min-h-target cursor-pointer py-2 font-semibold">
-        Left out, {rows.length}, each with its reason
+      <summary className="min-h-target cursor-pointer py-2">
+        <h2 className="inline">Left out, {rows.length}, each with its reason</h2>
       </summary>
       {kinds.map((why) => (
         <section key={why} className="mt-3">

@@ -14,6 +14,9 @@ interface OriginalAsPlannedProps {
   thumbnail: ReactNode
 }
 
+/** Name and strip: side by side on phones, one above the other where there is room for all in a row. */
+const PAIR = 'max-sm:grid max-sm:grid-cols-[7.5rem_1fr] max-sm:items-center max-sm:gap-x-2'
+
 /** What every swap is measured against: the original, done as planned. */
 export function OriginalAsPlanned({ ranking, units, loadKind, thumbnail }: OriginalAsPlannedProps) {
   const { originalRow, original, target } = ranking
@@ -33,8 +36,8 @@ export function OriginalAsPlanned({ ranking, units, loadKind, thumbnail }: Origi
             As planned it is beyond current strength, so there is nothing to compare with.
           </p>
         ) : (
-          <dl className="grid min-w-0 flex-3 basis-80 grid-cols-[repeat(auto-fit,minmax(9rem,1fr))] gap-x-5 gap-y-1">
-            <div>
+          <dl className="grid min-w-0 flex-3 basis-72 gap-x-5 gap-y-0.5 sm:grid-cols-[repeat(auto-fit,minmax(9rem,1fr))]">
+            <div className={PAIR}>
               <dt className="text-pencil">{capitalise(TARGET_WORDS[target])} driven to</dt>
               <dd>
                 <LoadStrip kind="drive" label={capitalise(TARGET_WORDS[target])} share={originalRow.targetDrive} />
@@ -44,7 +47,7 @@ export function OriginalAsPlanned({ ranking, units, loadKind, thumbnail }: Origi
               const stress = stressAt(originalRow.joints, joint)
               if (stress === undefined) return []
               return (
-                <div key={joint.key}>
+                <div key={joint.key} className={PAIR}>
                   <dt className={joint.sore ? 'font-semibold text-oxide' : 'text-pencil'}>{joint.title}</dt>
                   <dd>
                     <LoadStrip

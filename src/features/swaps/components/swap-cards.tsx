@@ -54,9 +54,9 @@ function SwapCard({ row, joints, target, load, thumbnail, detail, onTake, taking
       <div className="flex gap-3">
         {thumbnail}
         <div className="min-w-0 flex-1">
-          <h3 className="text-lg">
+          <h2 className="text-lg">
             <span className="font-normal text-pencil">{row.rank}</span> {row.exercise.name}
-          </h3>
+          </h2>
           <p className="leading-snug text-pencil">{pathWords(row.exercise)}</p>
           <p className="mt-1 font-semibold">
             {setsWords(row.dose)} · {load}

@@ -3,6 +3,7 @@ import type { Place } from '#shared/contract/place'
 import { GUIDANCES, type Guidance } from '#shared/mechanics/vocabulary'
 import { Field } from '@/components/ui/field'
 import { Select } from '@/components/ui/inputs'
+import { useWide } from '@/lib/use-wide'
 import { GUIDANCE_WORDS } from '@/lib/words'
 import type { RankingFilters } from '../api'
 
@@ -19,10 +20,46 @@ interface SwapFiltersProps {
   count: string
 }
 
-export function SwapFilters({ filters, onChange, places, placeId, count }: SwapFiltersProps) {
+/** Beside each other above a table; folded away above cards, where the first card matters more. */
+export function SwapFilters(props: SwapFiltersProps) {
+  const wide = useWide()
+  const { filters, places, placeId, count } = props
+  if (wide)
+    return (
+      <div className="mb-3 flex flex-wrap items-end gap-x-6 gap-y-3">
+        <Fields {...props} />
+        <p role="status" className="ml-auto text-pencil">
+          {count}
+        </p>
+      </div>
+    )
+  const place = places.find(({ id }) => id === (filters.placeId ?? placeId))
+  const chosen = [
+    place?.name,
+    filters.guidance !== undefined && GUIDANCE_WORDS[filters.guidance],
+    filters.maxCoordination !== undefined && `coordination ${filters.maxCoordination} at most`,
+  ].filter(Boolean)
   return (
-    <div className="mb-3 flex flex-wrap items-end gap-x-6 gap-y-3">
-      <Field label="Place" className="min-w-44">
+    <>
+      <details className="mb-2 rounded-xl border border-rule bg-card px-3">
+        <summary className="cursor-pointer py-2.5">
+          <b>Filters</b> <span className="text-pencil">{chosen.join(', ')}</span>
+        </summary>
+        <div className="grid gap-3 pb-3 sm:grid-cols-2">
+          <Fields {...props} />
+        </div>
+      </details>
+      <p role="status" className="mb-2 text-right text-pencil">
+        {count}
+      </p>
+    </>
+  )
+}
+
+function Fields({ filters, onChange, places, placeId }: SwapFiltersProps) {
+  return (
+    <>
+      <Field label="Place" className="min-w-0 lg:min-w-44">
         <Select
           value={filters.placeId ?? placeId ?? ''}
           onChange={(event) => onChange({ placeId: event.target.value || undefined })}
@@ -35,7 +72,7 @@ export function SwapFilters({ filters, onChange, places, placeId, count }: SwapF
           ))}
         </Select>
       </Field>
-      <Field label="Path" className="min-w-40">
+      <Field label="Path" className="min-w-0 lg:min-w-40">
         <Select
           value={filters.guidance ?? ''}
           onChange={(event) =>
@@ -51,10 +88,7 @@ export function SwapFilters({ filters, onChange, places, placeId, count }: SwapF
         </Select>
       </Field>
       <CoordinationSlider most={filters.maxCoordination} onRest={(maxCoordination) => onChange({ maxCoordination })} />
-      <p role="status" className="ml-auto text-pencil">
-        {count}
-      </p>
-    </div>
+    </>
   )
 }
 
@@ -92,7 +126,7 @@ function CoordinationSlider({
           setValue(Number(event.target.value))
           setMoved(true)
         }}
-        className="min-h-target w-48 accent-slate"
+        className="min-h-target w-full accent-slate lg:w-48"
       />
     </div>
   )

@@ -42,7 +42,7 @@ function useCellContext(): CellContext {
 function ExerciseCell({ row }: { row: SwapRow }) {
   const { thumbnail } = useCellContext()
   return (
-    <div className="flex w-56 items-center gap-2">
+    <div className="flex w-52 items-center gap-2">
       {thumbnail(row)}
       <div className="min-w-0 leading-snug">
         <span className="text-pencil">{row.rank}</span> <span className="font-semibold">{row.exercise.name}</span>
@@ -55,8 +55,8 @@ function ExerciseCell({ row }: { row: SwapRow }) {
 function DoseCell({ row }: { row: SwapRow }) {
   const { units, loadKind } = useCellContext()
   return (
-    <span className="whitespace-nowrap">
-      <b>{setsWords(row.dose)}</b>
+    <span className="block max-w-24 leading-snug">
+      <b className="whitespace-nowrap">{setsWords(row.dose)}</b>
       <span className="block text-pencil">
         {formatDoseLoad(row.dose, units, loadKind(row.exercise.id)) ?? 'body weight'}
       </span>
@@ -71,7 +71,7 @@ function TakeCell({ row }: { row: SwapRow }) {
       onClick={() => onTake?.(row)}
       busy={takingId === row.exercise.id}
       disabled={takingId !== undefined}
-      className="px-3"
+      className="px-2.5"
     >
       Take <span className="sr-only">{row.exercise.name}</span>
     </Button>
