@@ -15,7 +15,6 @@ export default defineConfig({
           include: ['tests/server/**/*.test.ts', 'tests/seeds/**/*.test.ts'],
           globalSetup: ['tests/support/global-setup.ts'],
           pool: 'forks',
-          maxWorkers: 2,
           testTimeout: 20_000,
           hookTimeout: 60_000,
         },
@@ -30,6 +29,7 @@ export default defineConfig({
           pool: 'forks',
           // The journeys share one server and two processor cores.
           fileParallelism: false,
+          sequence: { groupOrder: 1 },
           testTimeout: 120_000,
           hookTimeout: 120_000,
         },

@@ -45,7 +45,7 @@ async function check(name: string, command: string, args: string[], env?: Record
 
 /** Counts every test of these vitest projects. A file that could not be loaded, and a skipped test, count as failed. */
 async function tests(name: string, projects: string[]): Promise<void> {
-  const file = `${REPORTS}/${name}.json`
+  const file = `${REPORTS}/${projects.join('-')}.json`
   const start = Date.now()
   console.log(`\n# ${name}`)
   rmSync(file, { force: true })
