@@ -1,10 +1,12 @@
-import { createHash } from 'node:crypto'
 import { LRUCache } from 'lru-cache'
 
 /** Bytes that stand for something, kept once however many refer to them. */
 export interface Block {
   readonly bytes: Buffer
 }
+
+/** Blocks lie side by side in pieces of this size: a buffer of its own for each would cost as much again. */
+const PIECE = 256 * 1024
 
 /** Blocks whose contents stay alive once they were read: all of an ordinary catalogue. */
 const ALIVE = 400
@@ -15,18 +17,32 @@ const ALIVE = 400
  */
 export class BlockStore<T extends object> {
   private byHash = new Map<string, Block>()
+  private piece = Buffer.alloc(0)
+  private used = 0
   private readonly alive = new LRUCache<Block, T>({ max: ALIVE })
 
   constructor(private readonly read: (bytes: Buffer) => T) {}
 
-  /** The block of these bytes. They are copied, so the caller may write over them. */
-  keep(bytes: Buffer): Block {
-    const hash = createHash('sha256').update(bytes).digest('base64')
-    const known = this.byHash.get(hash)
-    if (known !== undefined) return known
-    const block = { bytes: Buffer.from(bytes) }
+  /** The block whose bytes have this hash, if they are kept. */
+  find(hash: string): Block | undefined {
+    return this.byHash.get(hash)
+  }
+
+  /** The block of the bytes that have this hash; they are copied unless they are kept already. */
+  keep(hash: string, bytes: Buffer): Block {
+    const block = this.byHash.get(hash) ?? { bytes: this.copy(bytes) }
     this.byHash.set(hash, block)
     return block
+  }
+
+  private copy(bytes: Buffer): Buffer {
+    if (this.used + bytes.length > this.piece.length) {
+      this.piece = Buffer.allocUnsafeSlow(Math.max(PIECE, bytes.length))
+      this.used = 0
+    }
+    const start = this.used
+    this.used += bytes.copy(this.piece, start)
+    return this.piece.subarray(start, this.used)
   }
 
   /** What the block stands for. Shared: nobody may change it. */

@@ -3,7 +3,7 @@ import { ruleSet as ruleSetSchema } from '#shared/contract/rule-set'
 import type { Sex } from '#shared/mechanics/sex'
 import type { ExerciseSolution } from '#shared/mechanics/solution'
 import { AppError } from '../../errors'
-import type { Block } from './block-store'
+import type { Block, BlockStore } from './block-store'
 import { CatalogueBlocks, CatalogueEdition, type KeptVersion } from './catalogue-edition'
 import { packSolution } from './packed-solution'
 
@@ -19,10 +19,51 @@ export const EDITION_SQL = `
   (select rs.version from rule_sets rs where rs.is_active) as "ruleSetVersion"`
 
 /** Rows that are read from the database at once, so that memory does not peak while a long catalogue is loaded. */
-const BATCH = 100
+const BATCH = 50
 
 const inBatches = <T>(items: readonly T[]): T[][] =>
   Array.from({ length: Math.ceil(items.length / BATCH) }, (_, index) => items.slice(index * BATCH, (index + 1) * BATCH))
+
+const jsonBytes = (value: unknown) => Buffer.from(JSON.stringify(value))
+
+/**
+ * The block of a JSON part of each version, by version id. Parts are told apart by their hash, so that one that many
+ * versions share is read from the database once.
+ */
+async function keepBlocks<T extends object>(
+  manager: EntityManager,
+  store: BlockStore<T>,
+  part: string,
+  versions: ReadonlyArray<{ versionId: string }>,
+  toBytes: (value: unknown) => Buffer,
+): Promise<Map<string, Block>> {
+  const hashSql = `encode(sha256(convert_to((${part})::text, 'UTF8')), 'base64')`
+  const where = 'from exercise_versions v where v.id = any($1::uuid[])'
+  const hashed: Array<{ versionId: string; hash: string }> = await manager.query(
+    `select v.id as "versionId", ${hashSql} as hash ${where}`,
+    [versions.map(({ versionId }) => versionId)],
+  )
+  const blocks = new Map<string, Block>()
+  const unknown = new Map<string, string>()
+  for (const { hash, versionId } of hashed) {
+    const block = store.find(hash)
+    if (block === undefined) unknown.set(hash, versionId)
+    else blocks.set(hash, block)
+  }
+  if (unknown.size > 0) {
+    const read: Array<{ hash: string; value: unknown }> = await manager.query(
+      `select ${hashSql} as hash, ${part} as value ${where}`,
+      [[...unknown.values()]],
+    )
+    for (const { hash, value } of read) blocks.set(hash, store.keep(hash, toBytes(value)))
+  }
+  return new Map(
+    hashed.flatMap(({ versionId, hash }) => {
+      const block = blocks.get(hash)
+      return block === undefined ? [] : [[versionId, block] as const]
+    }),
+  )
+}
 
 /**
  * The published exercises, kept in memory: ranking reads all of them for every answer. Each request learns from its
@@ -79,35 +120,29 @@ export class Catalogue {
 
   /** The current versions by exercise; those that are known already are not read again. */
   private async loadVersions(manager: EntityManager): Promise<Map<string, KeptVersion>> {
+    const { heads, mechanics } = this.blocks
     const listed: Array<{ id: string; versionId: string }> = await manager.query(
       `select v.exercise_id as id, v.id as "versionId"
          from exercise_versions v where v.is_current order by v.name, v.exercise_id`,
     )
     const versions = new Map<string, KeptVersion>()
     for (const batch of inBatches(listed)) {
-      const known = batch.flatMap(({ id, versionId }) => {
-        const version = this.current?.versions.get(id)
-        return version?.versionId === versionId ? [version] : []
-      })
-      const missing = batch.filter(({ id }) => !known.some((version) => version.id === id))
-      const rows: Array<Record<'id' | 'versionId' | 'head' | 'mechanics', string> & { coordination: number }> =
-        missing.length === 0
-          ? []
-          : await manager.query(
-              `select v.exercise_id as id, v.id as "versionId", v.coordination,
-                      (v.document - 'mechanics')::text as head, (v.document -> 'mechanics')::text as mechanics
-                 from exercise_versions v where v.id = any($1::uuid[])`,
-              [missing.map(({ versionId }) => versionId)],
-            )
-      const read = rows.map(({ head, mechanics, ...row }) => ({
-        ...row,
-        head: this.blocks.heads.keep(Buffer.from(head)),
-        mechanics: this.blocks.mechanics.keep(Buffer.from(mechanics)),
-      }))
-      const byId = new Map([...known, ...read].map((version) => [version.id, version]))
-      for (const { id } of batch) {
-        const version = byId.get(id)
-        if (version !== undefined) versions.set(id, version)
+      const missing = batch.filter(({ id, versionId }) => this.current?.versions.get(id)?.versionId !== versionId)
+      const headOf = await keepBlocks(manager, heads, `v.document - 'mechanics'`, missing, jsonBytes)
+      const mechanicsOf = await keepBlocks(manager, mechanics, `v.document -> 'mechanics'`, missing, jsonBytes)
+      const rows: Array<{ versionId: string; coordination: number }> = await manager.query(
+        'select v.id as "versionId", v.coordination from exercise_versions v where v.id = any($1::uuid[])',
+        [missing.map(({ versionId }) => versionId)],
+      )
+      const coordinationOf = new Map(rows.map(({ versionId, coordination }) => [versionId, coordination]))
+      for (const { id, versionId } of batch) {
+        const known = this.current?.versions.get(id)
+        const head = headOf.get(versionId)
+        const own = mechanicsOf.get(versionId)
+        const coordination = coordinationOf.get(versionId)
+        if (head !== undefined && own !== undefined && coordination !== undefined) {
+          versions.set(id, { id, versionId, coordination, head, mechanics: own })
+        } else if (known !== undefined) versions.set(id, known)
       }
     }
     return versions
@@ -126,21 +161,13 @@ export class Catalogue {
     const known = this.solved.get(sex)
     const solved = new Map<string, Block>()
     for (const batch of inBatches([...edition.versions.values()])) {
-      const missing = batch.filter(({ versionId }) => !known?.has(versionId)).map(({ versionId }) => versionId)
-      const rows: Array<{ versionId: string; solution: ExerciseSolution }> =
-        missing.length === 0
-          ? []
-          : await this.dataSource.query(
-              `select v.id as "versionId", v.solutions -> $2::text as solution
-                 from exercise_versions v where v.id = any($1::uuid[])`,
-              [missing, sex],
-            )
-      for (const { versionId, solution } of rows) {
-        solved.set(versionId, this.blocks.solutions.keep(packSolution(solution)))
-      }
+      const missing = batch.filter(({ versionId }) => !known?.has(versionId))
+      const toBytes = (solution: unknown) => packSolution(solution as ExerciseSolution)
+      const { manager } = this.dataSource
+      const found = await keepBlocks(manager, this.blocks.solutions, `v.solutions -> '${sex}'`, missing, toBytes)
       for (const { versionId } of batch) {
-        const kept = known?.get(versionId)
-        if (kept !== undefined) solved.set(versionId, kept)
+        const block = found.get(versionId) ?? known?.get(versionId)
+        if (block !== undefined) solved.set(versionId, block)
       }
     }
     this.solved.set(sex, solved)

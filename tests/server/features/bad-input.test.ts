@@ -167,7 +167,7 @@ describe('whatever is sent', () => {
     ]
     await fc.assert(
       fc.asyncProperty(oddText, fc.nat(12), async (text, index) => {
-        const url = urls(encodeURIComponent(text.toWellFormed()))[index]!
+        const url = urls(encodeURIComponent(text.replace(/[\ud800-\udfff]/gu, '')))[index]!
         await expectNoServerError(await agent.get(url))
       }),
       { numRuns: RUNS * 3 },
