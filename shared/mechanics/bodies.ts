@@ -19,6 +19,7 @@ export const SEGMENT_NAMES = [
 export type SegmentName = (typeof SEGMENT_NAMES)[number]
 /** 0 working side, 1 idle side, undefined on the midline. */
 export type LimbIndex = 0 | 1
+/** A segment by name, and by side where it belongs to a limb. */
 export interface SegmentRef {
   name: SegmentName
   limb?: LimbIndex
@@ -77,12 +78,13 @@ export function segmentBodies(posture: Posture, table: SegmentTable): SegmentBod
   return bodies
 }
 
+/** The role of a limb's joints. */
 export const roleOf = (limb: LimbIndex | undefined): Role =>
   limb === undefined ? 'middle' : limb === 0 ? 'working' : 'idle'
 
-/** Everything distal of each joint, the pelvis being the root. */
 const ARM: SegmentName[] = ['upperArm', 'forearm', 'hand']
 const LEG: SegmentName[] = ['thigh', 'shank', 'foot']
+/** Joints at which the body is cut in two; the pelvis is the root. */
 export type CutName = 'wrist' | 'elbow' | 'shoulder' | 'hip' | 'knee' | 'ankle' | 'lumbar' | 'neck'
 
 /** Whether a segment lies on the distal side of the cut. */

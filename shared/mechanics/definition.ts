@@ -20,6 +20,10 @@ export interface ExerciseMechanics {
   grip: Grip
   gripWidth: GripWidth
   armPlane: ArmPlane
+  /**
+   * Of two that bear, the first only pushes, and the second also takes sideways pull and twist: name the hand, forearms or bench
+   * first and the feet, whose base is wide, second.
+   */
   supports: Support[]
   /** Height of the first support above the second when two bear (a hand on a low bar, a foot on a bench), × stature. */
   rise?: number

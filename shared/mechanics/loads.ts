@@ -14,6 +14,12 @@ export interface Force {
   couple?: Vector
 }
 
+/** One set of forces (gravity, or the load) in equilibrium: the segments' own weights, and what acts from outside. */
+export interface ForceSet {
+  weights: readonly Force[]
+  external: readonly Force[]
+}
+
 /** Gravity on every segment, in units of body weight. */
 export const gravityForces = (bodies: readonly SegmentBody[]): Force[] =>
   bodies.map(({ name, limb, mass, centre }) => ({ segment: { name, limb }, at: centre, force: [0, 0, -mass] }))

@@ -2,20 +2,15 @@ import { roleOf, type CutName, type LimbIndex, type SegmentRef } from './bodies'
 import { flatBack } from './contacts'
 import type { ExerciseMechanics } from './definition'
 import { cutWrench } from './equilibrium'
-import type { Force } from './loads'
+import { gripTerms } from './grip'
+import type { Force, ForceSet } from './loads'
 import type { Posture } from './posture'
-import { AXES, type Axis, type Term, type Vector } from './solution'
-import { add, cross, dot, length, scale, subtract, unit } from './vector'
-import type { Action } from './vocabulary'
+import type { Axis, Term, Vector } from './solution'
+import { cross, dot, scale, subtract, unit } from './vector'
 
 /** Below this share of body weight × stature a moment is rounding, not work. */
 const NEGLIGIBLE = 1e-12
 
-/** One set of forces (gravity, or the load) in equilibrium: the segments' own weights, and what acts from outside. */
-export interface ForceSet {
-  weights: readonly Force[]
-  external: readonly Force[]
-}
 const allOf = ({ weights, external }: ForceSet): Force[] => [...weights, ...external]
 
 interface Cut {
@@ -139,73 +134,11 @@ export function jointTerms(
       const reports = axis === 'handAxial' || axis === 'lumbarAxial'
       const value = (side: { force: Vector; moment: Vector }) =>
         (reports ? 1 : -1) * dot(kind === 'moment' ? side.moment : side.force, direction)
-      push(terms, { axis, role: roleOf(cut.limb), a: value(body), b: value(load) })
+      terms.push({ axis, role: roleOf(cut.limb), a: value(body), b: value(load) })
     }
   }
-  gripTerms(mechanics, posture, sets, terms)
-  return terms
+  return [...terms, ...gripTerms(mechanics, posture, sets)].filter(works)
 }
 
-function push(terms: Term[], term: Term): void {
-  if (Math.abs(term.a) < NEGLIGIBLE && Math.abs(term.b) < NEGLIGIBLE) return
-  terms.push(term)
-}
-
-/**
- * Grip: the force on the hand along its own line at the reference load, in full when it pulls the hand away from the
- * forearm, half when square to it, none when it presses into the palm: (1 + cos)/2. Our rule; no source.
- */
-function gripTerms(
-  mechanics: ExerciseMechanics,
-  posture: Posture,
-  sets: { body: ForceSet; load: ForceSet },
-  terms: Term[],
-): void {
-  if (mechanics.grip === 'none' || mechanics.gripFree) return
-  for (const limb of [0, 1] as const) {
-    if (limb === 1 && mechanics.sides === 'both') continue
-    const arm = posture.arms[limb]
-    const frame = posture.frame
-    if ((limb === 1 ? (frame.offArm ?? frame.arms) : frame.arms).flat !== undefined) continue
-    const onHand = (set: ForceSet) =>
-      set.external
-        .filter(({ segment }) => segment.name === 'hand' && segment.limb === limb)
-        .reduce<Vector>((sum, force) => add(sum, force.force), [0, 0, 0])
-    const body = onHand(sets.body)
-    const load = onHand(sets.load)
-    const reference = mechanics.referenceLoad === 0 ? 1 : mechanics.referenceLoad
-    const total = add(body, scale(load, reference))
-    if (length(total) < NEGLIGIBLE) continue
-    const line = unit(total)
-    const openness = (1 + dot(line, unit(subtract(arm.wrist, arm.elbow)))) / 2
-    push(terms, { axis: 'grip', role: roleOf(limb), a: openness * dot(body, line), b: openness * dot(load, line) })
-  }
-}
-
-/** The axis and sign that an action works on. */
-export function axisOfAction(action: Action): { axis: Axis; sign: 1 | -1 } {
-  for (const axis of Object.keys(AXES) as Axis[]) {
-    const [positive, negative] = AXES[axis]
-    if (positive === action) return { axis, sign: 1 }
-    if (negative === action) return { axis, sign: -1 }
-  }
-  throw new Error(`No axis carries ${action}`)
-}
-
-/** Adds what a lever machine or cuff asks directly of an action. */
-export function addDirectMoments(mechanics: ExerciseMechanics, frameIndex: number, terms: Term[]): Term[] {
-  const result = terms.map((term) => ({ ...term }))
-  for (const moment of mechanics.moments ?? []) {
-    const { axis, sign } = axisOfAction(moment.action)
-    const middle = axis === 'neck' || axis.startsWith('trunk')
-    const sides = middle || mechanics.sides === 'oneAtATime' || moment.share === 'each' ? 1 : 2
-    const b = (sign * moment.arm * (moment.ratio ?? 1) * (moment.curve?.[frameIndex] ?? 1)) / sides
-    const role = middle ? 'middle' : 'working'
-    const standing = result.find((term) => term.axis === axis && term.role === role)
-    // Where both ways count as one action (leaning or turning the trunk), the machine adds to what is there.
-    const same = AXES[axis][0] === AXES[axis][1] && standing && (standing.b || standing.a) < 0 ? -1 : 1
-    if (standing) standing.b += same * b
-    else result.push({ axis, role, a: 0, b })
-  }
-  return result
-}
+/** Whether a term is more than rounding; one that is not a number stays, to be refused. */
+const works = ({ a, b }: Term): boolean => !(Math.abs(a) < NEGLIGIBLE && Math.abs(b) < NEGLIGIBLE)

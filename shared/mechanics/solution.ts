@@ -47,6 +47,7 @@ export interface Term {
   b: number
 }
 
+/** Drawn points on the midline, and those that each side has. */
 export const POINTS = ['pelvis', 'lumbar', 'neckBase', 'headCentre', 'headTop'] as const
 export const SIDE_POINTS = [
   'shoulder',
@@ -79,6 +80,7 @@ export interface PoseAngles {
   ankle: number
 }
 
+/** What one contact of a solved support bears. */
 export interface Reaction {
   support: Support
   role: Role
@@ -97,6 +99,7 @@ export interface LoadLine {
   toward?: Vector
 }
 
+/** One posture with all that was computed for it. */
 export interface SolvedFrame {
   name: string
   pose: Pose
