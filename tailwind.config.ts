@@ -30,6 +30,8 @@ export default {
       slate: token('slate'),
       /** Tracks, table heads, the chosen place in the rail. */
       wash: token('wash'),
+      /** Over the page while a dialog is open. */
+      shade: 'rgb(12 14 16 / 0.6)',
       /** An opened row: half way from card to wash. */
       opened: 'color-mix(in srgb, var(--wash) 50%, var(--card))',
       'brass-wash': token('brass-wash'),

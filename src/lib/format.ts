@@ -39,8 +39,12 @@ export function formatDose(dose: Dose, units: Units, kind?: ExerciseDocument['lo
 
 /** “Right elbow would reach 71 %, cap 50 %.” */
 export function formatOverCap({ joint, side, stress, cap }: JointStress): string {
-  const reach = `${capitalise(jointWords(joint, side))} would reach ${formatPercent(stress)}`
-  return cap === null ? `${reach}.` : `${reach}, cap ${formatPercent(cap)}.`
+  const name = capitalise(jointWords(joint, side))
+  if (cap === null) return `${name} would reach ${formatPercent(stress)}.`
+  // Two equal numbers would not say why this is too much.
+  if (stress > cap && formatPercent(stress) === formatPercent(cap))
+    return `${name} would just pass its cap of ${formatPercent(cap)}.`
+  return `${name} would reach ${formatPercent(stress)}, cap ${formatPercent(cap)}.`
 }
 
 /** “Tuesday 1 December” */

@@ -21,7 +21,7 @@ export function ConfirmDialog(props: ConfirmDialogProps) {
   return (
     <Radix.Root open={props.open} onOpenChange={(next) => !next && props.onCancel()}>
       <Radix.Portal>
-        <Radix.Overlay className="fixed inset-0 z-50 bg-black/50" />
+        <Radix.Overlay className="fixed inset-0 z-50 bg-shade print:hidden" />
         <Radix.Content className="fixed top-1/2 left-1/2 z-50 w-[min(30rem,92vw)] -translate-x-1/2 -translate-y-1/2 rounded-xl border border-rule bg-card p-6">
           <Radix.Title className="mb-2 text-xl">{props.title}</Radix.Title>
           <Radix.Description asChild>

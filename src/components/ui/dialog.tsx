@@ -30,7 +30,7 @@ export function Dialog({ open, onClose, title, description, step, footer, childr
   return (
     <Radix.Root open={open} onOpenChange={(next) => !next && onClose()}>
       <Radix.Portal>
-        <Radix.Overlay className="fixed inset-0 z-40 bg-black/50" />
+        <Radix.Overlay className="fixed inset-0 z-40 bg-shade print:hidden" />
         <Radix.Content
           {...(description === undefined ? { 'aria-describedby': undefined } : {})}
           className="fixed inset-0 z-50 flex flex-col bg-paper sm:inset-auto sm:top-1/2 sm:left-1/2 sm:max-h-[92dvh] sm:w-[min(42rem,94vw)] sm:-translate-x-1/2 sm:-translate-y-1/2 sm:rounded-xl sm:border sm:border-rule"

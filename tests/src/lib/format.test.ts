@@ -39,6 +39,11 @@ describe('numbers carry their unit', () => {
     )
   })
 
+  it('does not say that 60 % is too much for a cap of 60 %', () => {
+    const hit = { joint: 'elbow', side: 'right', stress: 0.603, cap: 0.6 } as const
+    expect(plain(formatOverCap(hit))).toBe('Right elbow would just pass its cap of 60 %.')
+  })
+
   it('names a calendar day without shifting it between time zones', () =>
     expect(formatDay('2026-12-01')).toBe('Tuesday 1 December'))
 })

@@ -56,8 +56,8 @@ export function ClearanceDialog({
     >
       <form noValidate onSubmit={(event) => void save(event)} className="grid gap-4">
         <p>
-          {capitalise(name)} opens again with its rating and its caps, and swaps are shown for it. Your name and this
-          note stay in the report.
+          {capitalise(name)} opens again with its rating and its caps, and swaps are shown for it. Your name stays in
+          the report, and the note is kept with it.
         </p>
         <Field label="What you examined, and why training may go on" error={form.formState.errors.note?.message}>
           <TextArea rows={5} {...form.register('note')} />
