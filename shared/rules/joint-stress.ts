@@ -1,6 +1,6 @@
 import type { JointStress } from '../contract/exercise'
 import { JOINTS, type Joint, type Side } from '../mechanics/vocabulary'
-import { loadRange, type Bound, type LoadRange } from './load-range'
+import { cutRange, EVERY_LOAD, type LoadRange } from './load-range'
 import type { Strain } from './stress'
 import type { Cap, StressChannel } from './types'
 
@@ -98,11 +98,14 @@ export const isOver = ({ stress, cap }: Pick<Tightest, 'stress' | 'cap'>): boole
 
 /** The loads that keep every channel under the strictest of its caps. Both sides do the same work, turn about if need be. */
 export function capRange(strains: readonly Strain[], caps: CapTable): LoadRange {
-  const bounds: Bound[] = []
+  const range = { ...EVERY_LOAD }
   for (const { joint, channel, constant, slope } of strains) {
-    let limit = Number.POSITIVE_INFINITY
-    for (const { byChannel } of caps.get(joint) ?? []) limit = Math.min(limit, byChannel.get(channel)?.limit ?? limit)
-    if (limit !== Number.POSITIVE_INFINITY) bounds.push({ constant, slope, limit })
+    const sides = caps.get(joint)
+    if (sides === undefined) continue
+    for (const { byChannel } of sides) {
+      const cap = byChannel.get(channel)
+      if (cap !== undefined) cutRange(range, constant, slope, cap.limit)
+    }
   }
-  return loadRange(bounds)
+  return range
 }

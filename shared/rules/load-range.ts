@@ -1,54 +1,41 @@
 import type { Effort } from './efforts'
 import type { Action } from '../mechanics/vocabulary'
 
-/** value(L) = constant + slope·L must not pass `limit`. */
-export interface Bound {
-  constant: number
-  slope: number
-  limit: number
-}
-
-/** The loads (kg) that respect every bound: an interval, empty when least > most. */
-export interface LoadRange<B extends Bound = Bound> {
+/** The loads (kg) that respect a set of bounds: an interval, empty when least > most. */
+export interface LoadRange {
   least: number
   most: number
-  /** Which bound sets the upper end, or makes the range empty whatever the load. */
-  mostBy: B | null
 }
 
-/** Interval arithmetic over affine bounds: each one cuts the line of loads once. */
-export function loadRange<B extends Bound>(bounds: Iterable<B>): LoadRange<B> {
-  let least = Number.NEGATIVE_INFINITY
-  let most = Number.POSITIVE_INFINITY
-  let mostBy: B | null = null
-  for (const bound of bounds) {
-    const { constant, slope, limit } = bound
-    if (slope === 0) {
-      if (constant > limit) return { least: Number.POSITIVE_INFINITY, most: Number.NEGATIVE_INFINITY, mostBy: bound }
-      continue
-    }
-    const edge = (limit - constant) / slope
-    if (slope > 0) {
-      if (edge < most) {
-        most = edge
-        mostBy = bound
-      }
-    } else if (edge > least) least = edge
+export const EVERY_LOAD: Readonly<LoadRange> = { least: Number.NEGATIVE_INFINITY, most: Number.POSITIVE_INFINITY }
+
+/**
+ * Cuts a range by one bound, constant + slope·L ≤ limit. Interval arithmetic: a bound that L cannot change leaves all or nothing.
+ * @returns whether the bound set a new upper end
+ */
+export function cutRange(range: LoadRange, constant: number, slope: number, limit: number): boolean {
+  if (slope === 0) {
+    if (constant <= limit) return false
+    range.least = Number.POSITIVE_INFINITY
+    range.most = Number.NEGATIVE_INFINITY
+    return true
   }
-  return { least, most, mostBy }
+  const edge = (limit - constant) / slope
+  if (slope > 0) {
+    if (edge >= range.most) return false
+    range.most = edge
+    return true
+  }
+  if (edge > range.least) range.least = edge
+  return false
 }
 
-/** Bounds that keep every action at or below a share of its strength. */
-export function* strengthBounds(
-  efforts: readonly Effort[],
-  share: number,
-): Generator<Bound & { action: Action; frame: number }> {
-  for (const { alpha, beta, positive, negative, strengthPositive, strengthNegative, frame } of efforts) {
-    if (positive) {
-      yield { constant: alpha, slope: beta, limit: share * strengthPositive, action: positive, frame }
-    }
-    if (negative) {
-      yield { constant: -alpha, slope: -beta, limit: share * strengthNegative, action: negative, frame }
-    }
+/** The loads at which every action stays at or below a share of its strength, and the action that sets the upper end. */
+export function strengthRange(efforts: readonly Effort[], share: number): LoadRange & { mostBy: Action | null } {
+  const range = { ...EVERY_LOAD, mostBy: null as Action | null }
+  for (const { alpha, beta, positive, negative, strengthPositive, strengthNegative } of efforts) {
+    if (positive !== null && cutRange(range, alpha, beta, share * strengthPositive)) range.mostBy = positive
+    if (negative !== null && cutRange(range, -alpha, -beta, share * strengthNegative)) range.mostBy = negative
   }
+  return range
 }

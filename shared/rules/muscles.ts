@@ -2,7 +2,7 @@ import type { RuleSet } from '../contract/rule-set'
 import { ACTIONS, GRIPS, type Action, type Grip } from '../mechanics/vocabulary'
 import { averageAdult } from './average-adult'
 import { askedAt, effortsOf } from './efforts'
-import { loadRange, strengthBounds } from './load-range'
+import { strengthRange } from './load-range'
 import { memo } from './memo'
 import { MUSCLES, TARGET_GROUPS, TARGET_GROUP_NAMES, type Muscle, type TargetGroup } from './muscle-names'
 import type { Movement } from './types'
@@ -82,7 +82,7 @@ export function musclesOf(
   ruleSet: RuleSet,
 ): Array<{ muscle: Muscle; drive: number }> {
   const efforts = effortsOf(movement, averageAdult('unspecified', ruleSet), ruleSet)
-  const range = loadRange(strengthBounds(efforts, 1))
+  const range = strengthRange(efforts, 1)
   const load = Number.isFinite(range.most) ? range.most : 0
   const { limiter, work } = askedAt(efforts, load)
   if (limiter === null) return []

@@ -2,7 +2,7 @@ import type { RuleSet } from '../contract/rule-set'
 import type { Dose } from '../contract/session'
 import { inRepetitions, intensity } from './dose'
 import { askedAt, effortsOf, type Asked, type Effort } from './efforts'
-import { loadRange, strengthBounds } from './load-range'
+import { strengthRange } from './load-range'
 import { strengthTables, type StrengthTables } from './strength'
 import { strainsOf, type Strain } from './stress'
 import type { Athlete, Candidate } from './types'
@@ -51,7 +51,7 @@ export function planned(prepared: Prepared, dose: Dose, ruleSet: RuleSet): Plann
   const { kind, least, most } = candidate.document.load
   let load = dose.load ?? 0
   if (dose.load === null && (kind === 'external' || kind === 'assistance')) {
-    const range = loadRange(strengthBounds(efforts, share))
+    const range = strengthRange(efforts, share)
     const possible = range.least <= range.most && Number.isFinite(range.most) ? range.most : (least ?? 0)
     load =
       kind === 'assistance'

@@ -3,7 +3,7 @@ import type { RuleSet } from '../contract/rule-set'
 import { JOINTS, type Action } from '../mechanics/vocabulary'
 import { askedAt, demandOf, effortsOf } from './efforts'
 import { asJointStress, capTable, tightestBySide } from './joint-stress'
-import { loadRange, strengthBounds } from './load-range'
+import { strengthRange } from './load-range'
 import { muscleDrives } from './muscles'
 import { compressionAt, strainsOf } from './stress'
 import type { Athlete, Cap, Movement } from './types'
@@ -23,10 +23,10 @@ export function previewOf(
   const strains = strainsOf(movement, athlete, ruleSet)
   const asked = askedAt(efforts, load)
   const table = capTable(caps)
-  const range = loadRange(strengthBounds(efforts, 1))
+  const range = strengthRange(efforts, 1)
   const grows = Number.isFinite(range.most)
   const possible = range.least <= range.most
-  const limiter = grows && possible && range.mostBy ? range.mostBy.action : asked.limiter?.action
+  const limiter = grows && possible && range.mostBy ? range.mostBy : asked.limiter?.action
   return {
     frames: movement.solution.frames.map((frame, index) => {
       const strongest = new Map<Action, Preview['frames'][number]['actions'][number]>()

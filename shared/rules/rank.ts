@@ -6,7 +6,8 @@ import { asJointStress } from './joint-stress'
 import { rate, redFlagReason, shownJoints } from './rate'
 import type { Candidate, RankRequest, RankResult } from './types'
 
-type Unranked = Omit<SwapRow, 'rank'>
+/** A row before the others are known. */
+export type Unranked = Omit<SwapRow, 'rank'>
 const byText = (one: string, other: string): number => (one < other ? -1 : one > other ? 1 : 0)
 const byName = (one: { name: string; id: string }, other: { name: string; id: string }): number =>
   byText(one.name, other.name) || byText(one.id, other.id)
@@ -42,12 +43,17 @@ function originalRow(context: RankContext): RankResult['originalRow'] {
  * Whether the original may stand among its own swaps: only when it loads a sore joint, with the dose that fits under the caps,
  * so that it can be compared with what would spare the joint. A dose that comes out as planned is no swap and is dropped.
  */
-export function consideredIn(context: RankContext): readonly Candidate[] {
-  const { original, ruleSet, request } = context
-  const loaded = shownJoints(original.strains, context, original.load).some(
+export function considersOriginal(context: RankContext): boolean {
+  const { original, ruleSet } = context
+  return shownJoints(original.strains, context, original.load).some(
     ({ cap, stress }) => cap !== null && stress >= ruleSet.caps.loadedFrom.value,
   )
-  return loaded ? request.candidates : request.candidates.filter(({ id }) => id !== original.candidate.id)
+}
+
+/** The candidates a ranking looks at. */
+function consideredIn(context: RankContext): readonly Candidate[] {
+  const { candidates, original } = context.request
+  return considersOriginal(context) ? candidates : candidates.filter(({ id }) => id !== original.id)
 }
 
 /** Whether a row only repeats the original as planned. */

@@ -5,7 +5,7 @@ import type { RankContext } from './context'
 import { inUnit, intensity, setAt } from './dose'
 import { askedAt, effortsOf, type Asked, type Effort } from './efforts'
 import { asJointStress, capRange, isOver, stressOf, tightestBySide, type Tightest } from './joint-stress'
-import { loadRange, strengthBounds } from './load-range'
+import { strengthRange } from './load-range'
 import { groupDrive } from './muscles'
 import { equipmentName, jointName } from './names'
 import { beyondStrengthReason, notTrainedReason, overCapReason, swapReason, tooLittleReason } from './reasons'
@@ -71,7 +71,7 @@ function assistanceFor(candidate: Candidate, load: number, bodyMass: number): nu
 
 /** Where the limiter is at the planned intensity with sound joints, or the lightest there is (kg). */
 function healthyLoad(efforts: readonly Effort[], { lightest, heaviest }: Settings, { original }: RankContext): number {
-  const range = loadRange(strengthBounds(efforts, original.intensity))
+  const range = strengthRange(efforts, original.intensity)
   return Math.max(lightest, Math.min(range.least <= range.most ? range.most : Number.NEGATIVE_INFINITY, heaviest))
 }
 
@@ -124,7 +124,7 @@ function tooHard(
   const { athlete, planned } = context.request
   const { assistedForm } = candidate.document
   const share = limiter.demand > 1 ? 1 : intensity(1, planned.rir, context.ruleSet)
-  const assistance = assistanceFor(candidate, loadRange(strengthBounds(efforts, share)).most, athlete.bodyMass)
+  const assistance = assistanceFor(candidate, strengthRange(efforts, share).most, athlete.bodyMass)
   const form = assistedForm === undefined ? null : (context.names.get(assistedForm) ?? null)
   const reason = beyondStrengthReason(candidate, limiter, load, planned.rir, assistance, form)
   return leave(candidate, 'beyondStrength', reason)

@@ -126,7 +126,7 @@ export function muscleLoads(demands: Demands, grip: Grip, ruleSet: RuleSet): num
  * Cosine of two movements' action demands, 0–1; 0 when either does no work. Taken over what the actions ask of the muscles, so
  * that pulling down in the sagittal and in the frontal plane count as kin and not as strangers.
  */
-export function likeness(one: readonly number[], other: readonly number[]): number {
+export function likeness(one: ArrayLike<number>, other: ArrayLike<number>): number {
   let dot = 0
   let first = 0
   let second = 0

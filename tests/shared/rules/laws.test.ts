@@ -94,7 +94,7 @@ function* numbers(value: unknown): Generator<number> {
 const loadOf = (dose: { load: number | null }) => dose.load ?? 0
 const answer = ranking.pick({ originalRow: true, items: true, leftOut: true, sore: true, redFlags: true })
 
-describe('a ranking', () => {
+describe('a ranking', { timeout: 60_000 }, () => {
   it('has only finite numbers and keeps the contract for any valid request', () => {
     fc.assert(
       fc.property(request, (asked) => {
@@ -181,7 +181,7 @@ describe('a ranking', () => {
   })
 })
 
-describe('a body', () => {
+describe('a body', { timeout: 60_000 }, () => {
   it('never finds bodyweight work lighter for being heavier at equal strength', () => {
     const own = ['pull-up', 'push-up', 'handstand-hold', 'assisted-pull-up']
     fc.assert(
@@ -222,7 +222,7 @@ describe('a body', () => {
   })
 })
 
-describe('what a sore joint means for a plan', () => {
+describe('what a sore joint means for a plan', { timeout: 60_000 }, () => {
   it('names a joint only when it is over its cap or red-flagged, the flags first', () => {
     fc.assert(
       fc.property(request, fc.constantFrom(...RED_FLAGS), fc.boolean(), (asked, flag, flagged) => {
