@@ -52,6 +52,8 @@ export function SwapsBody({ query, filters, onFilter, back, between, onTake, tak
     ),
     [exerciseOf, sex],
   )
+  /** Under a red flag that leaves nothing to offer, only the advice stands. */
+  const stopped = ranking !== undefined && ranking.redFlags.length > 0 && ranking.items.length === 0
   const thumbnail = useCallback((row: SwapRow) => thumbnailOf(row.exercise.id, row.joints), [thumbnailOf])
 
   return (
@@ -88,22 +90,27 @@ export function SwapsBody({ query, filters, onFilter, back, between, onTake, tak
         <>
           <RedFlagNotice
             ranking={ranking}
+            own={ranking.athlete.id === person.id}
             advice={<StopAdvice flags={ranking.redFlags.flatMap(({ flags }) => flags)} />}
           />
           <SwapNotes estimated={ranking.estimated} minor={ranking.minor} />
-          <OriginalAsPlanned
-            ranking={ranking}
-            units={person.units}
-            loadKind={loadKind(ranking.original.id)}
-            thumbnail={thumbnailOf(ranking.original.id, ranking.originalRow?.joints)}
-          />
-          <SwapFilters
-            filters={filters}
-            onChange={onFilter}
-            places={places.data?.items ?? []}
-            placeId={ranking.placeId}
-            count={countWords(ranking.items.length, ranking.leftOut.length)}
-          />
+          {!stopped && (
+            <>
+              <OriginalAsPlanned
+                ranking={ranking}
+                units={person.units}
+                loadKind={loadKind(ranking.original.id)}
+                thumbnail={thumbnailOf(ranking.original.id, ranking.originalRow?.joints)}
+              />
+              <SwapFilters
+                filters={filters}
+                onChange={onFilter}
+                places={places.data?.items ?? []}
+                placeId={ranking.placeId}
+                count={countWords(ranking.items.length, ranking.leftOut.length)}
+              />
+            </>
+          )}
           <SwapResults
             ranking={ranking}
             units={person.units}

@@ -131,7 +131,7 @@ function groundShapes(
     )
   }
   const padded = bearsOn(mechanics, 'seat', 'backPad', 'chestPad')
-  const resting = padded || places.length === 0 ? frames.flatMap(({ pose }) => [pose.pelvis, pose.lumbar]) : []
+  const resting = padded || places.length === 0 ? frames.flatMap(({ pose }) => [pose.pelvis, pose.neckBase]) : []
   const xs = [...places, ...contacts, ...resting].map((place) => place[0])
   const [from, to] = [Math.min(...xs) - 0.16, Math.max(...xs) + 0.16]
   shapes.push(

@@ -1,4 +1,4 @@
-import { screen, waitFor, within } from '@testing-library/react'
+import { configure, screen, waitFor, within } from '@testing-library/react'
 import { beforeEach, describe, expect, it, vi } from 'vitest'
 import { ERROR_STATUS, type ErrorCode } from '#shared/contract/error-codes'
 import { Component } from '@/pages/swaps'
@@ -6,6 +6,9 @@ import { aFlag, aList, aPerson, aPlace, anExercise } from '../support/samples'
 import { fakeApi, Refusal, type Sent } from '../support/api'
 import { renderPage } from '../support/render'
 import { anExerciseOf, aPreview, aRanking, aSwapRow, aTakenSwap } from '../support/swap-samples'
+
+// Whole pages with drawings take jsdom a while on a busy machine.
+configure({ asyncUtilTimeout: 5_000 })
 
 const person = aPerson()
 const slotId = anExercise('slot').id
@@ -177,6 +180,7 @@ describe('the swap page', () => {
     expect(await screen.findByText('Stop, and see a licensed clinician.')).toBeInTheDocument()
     expect(screen.getByText('The care team you have let in has been told.')).toBeInTheDocument()
     expect(screen.queryByRole('button', { name: /Take/ })).toBeNull()
+    expect(screen.queryByLabelText('Path')).toBeNull()
     expect(screen.queryByText('No swap fits.')).toBeNull()
   })
 
@@ -232,8 +236,11 @@ describe('taking a swap', () => {
       [TAKE]: taken,
       [`POST /api/swaps/${taken.id}/undo`]: { ...taken, undoneAt: taken.takenAt },
     })
-    await user.click(await screen.findByRole('button', { name: 'Undo' }))
-    expect(await screen.findByText(/the planned exercise is back/)).toBeInTheDocument()
+    const button = await screen.findByRole('button', { name: 'Undo' })
+    // The message takes the pointer only once it has settled in its place.
+    await waitFor(() => user.click(button))
+    // Beside the message stands its copy for screen readers, for a moment.
+    expect(await screen.findByText(/the planned exercise is back/, { selector: 'li *' })).toBeInTheDocument()
     expect(sent.some(({ path }) => path === `/api/swaps/${taken.id}/undo`)).toBe(true)
   })
 

@@ -6,10 +6,12 @@ interface RedFlagNoticeProps {
   ranking: Pick<Ranking, 'redFlags' | 'items'>
   /** What to do now, in full. */
   advice: ReactNode
+  /** The reader is the athlete. */
+  own: boolean
 }
 
 /** A standing red flag ends the matter for its joint; what does not load it may still be offered. */
-export function RedFlagNotice({ ranking: { redFlags, items }, advice }: RedFlagNoticeProps) {
+export function RedFlagNotice({ ranking: { redFlags, items }, advice, own }: RedFlagNoticeProps) {
   if (redFlags.length === 0) return null
   const joints = listWords(redFlags.map(({ joint, side }) => jointWords(joint, side)))
   return (
@@ -18,7 +20,7 @@ export function RedFlagNotice({ ranking: { redFlags, items }, advice }: RedFlagN
         {capitalise(joints)}: red flag, so there are no swaps that load {redFlags.length === 1 ? 'it' : 'them'}.
       </p>
       {advice}
-      <p>The care team you have let in has been told.</p>
+      <p>The care team {own ? 'you have' : 'the athlete has'} let in has been told.</p>
       {items.length > 0 && (
         <p className="text-pencil">
           What is listed below does not load {redFlags.length === 1 ? 'that joint' : 'those joints'}.
