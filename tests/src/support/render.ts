@@ -1,5 +1,5 @@
 import { QueryClientProvider } from '@tanstack/react-query'
-import { render } from '@testing-library/react'
+import { configure, render } from '@testing-library/react'
 import userEvent from '@testing-library/user-event'
 import { createElement, type ReactElement } from 'react'
 import { createMemoryRouter, RouterProvider } from 'react-router-dom'
@@ -7,6 +7,9 @@ import type { Me } from '#shared/contract/me'
 import { ToastProvider } from '@/components/ui/toast'
 import { PersonProvider } from '@/lib/person'
 import { createQueryClient } from '@/lib/query-client'
+
+// A busy machine draws slowly; a law that does not hold fails all the same.
+configure({ asyncUtilTimeout: 5_000 })
 
 // jsdom has no pointer capture; the toast’s swipe asks for it.
 Element.prototype.hasPointerCapture ??= () => false
