@@ -56,14 +56,16 @@ export function buildRanking(
   now: Date,
 ): Ranking {
   const athlete: Athlete = toAthlete(inputs.profile, now)
-  const { exerciseId, planned, intent, target } = inputs.wanted
+  const { exerciseId, intent, target } = inputs.wanted
   const original = edition.find(athlete.sex, exerciseId)
   if (original === null) throw notFound('That exercise')
+  // A hold is counted in seconds, whatever the one who asks about it called its count.
+  const planned = { ...inputs.wanted.planned, unit: original.document.unit }
   const result = rank(
     {
       athlete,
       original,
-      planned: { ...planned, unit: original.document.unit },
+      planned,
       intent,
       target,
       candidates: edition.candidates(athlete.sex).filter((candidate) => passes(candidate, filters)),
