@@ -1,22 +1,20 @@
-import type { DataSource, QueryRunner } from 'typeorm'
+import pg from 'pg'
 
-/** How many statements the database is sent while `work` runs. */
-export async function countQueries(dataSource: DataSource, work: () => PromiseLike<unknown>): Promise<number> {
+type Query = (...args: unknown[]) => unknown
+
+/** How many statements this process sends to the database while `work` runs, on whatever connection. */
+export async function countQueries(work: () => PromiseLike<unknown>): Promise<number> {
+  const prototype = pg.Client.prototype as unknown as { query: Query }
+  const original = prototype.query
   let count = 0
-  const original = dataSource.createQueryRunner.bind(dataSource)
-  dataSource.createQueryRunner = (mode) => {
-    const runner: QueryRunner = original(mode)
-    const query = runner.query.bind(runner) as (...args: unknown[]) => Promise<unknown>
-    runner.query = ((...args: unknown[]) => {
-      count += 1
-      return query(...args)
-    }) as QueryRunner['query']
-    return runner
+  prototype.query = function counted(this: pg.Client, ...args: unknown[]) {
+    count += 1
+    return original.apply(this, args)
   }
   try {
     await work()
   } finally {
-    dataSource.createQueryRunner = original
+    prototype.query = original
   }
   return count
 }

@@ -3,6 +3,7 @@ import type { Place } from '#shared/contract/place'
 import type { Dose, Intent } from '#shared/contract/session'
 import type { TargetGroup } from '#shared/rules/muscle-names'
 import type { SoreJointInput } from '#shared/rules/index'
+import { queryPrepared } from '../../database/prepared'
 import { AppError, notFound } from '../../errors'
 import type { Actor } from '../../middleware/scope'
 import { profileJson, type ProfileJson } from '../athletes/engine-athlete'
@@ -100,7 +101,8 @@ export async function findInputsForSlot(
   slotId: string,
   placeId: string | undefined,
 ): Promise<RankingInputs> {
-  const rows: SlotRow[] = await manager.query(FOR_SLOT, [slotId, actor.userId, placeId ?? null])
+  const values = [slotId, actor.userId, placeId ?? null]
+  const rows = await queryPrepared<SlotRow>(manager, 'ranking inputs for a slot', FOR_SLOT, values)
   const row = rows[0]
   if (row === undefined) throw notFound('That slot')
   const { exerciseId, sets, repetitions, unit, rir, load, pieces, intent, target } = row

@@ -125,7 +125,7 @@ describe('GET /api/athletes', () => {
       await training.slot(athlete)
       await training.soreJoint(athlete)
     }
-    const count = (agent: typeof few.agent) => countQueries(app().dataSource, () => agent.get(LIST).expect(200))
+    const count = (agent: typeof few.agent) => countQueries(() => agent.get(LIST).expect(200))
     await count(few.agent)
     expect(await count(many.agent)).toBe(await count(few.agent))
     const read = { actorId: many.coach.id, action: 'read.athletes' }

@@ -16,10 +16,10 @@ describe('the catalogue in memory', () => {
     const catalogue = new Catalogue(dataSource)
     const edition = await catalogue.latest(['male'])
     const wanted = { revision: edition.revision, ruleSetVersion: 1 }
-    expect(await countQueries(dataSource, () => catalogue.edition(wanted, ['male']))).toBe(0)
-    const alone = await countQueries(dataSource, () => new Catalogue(dataSource).edition(wanted, ['male']))
+    expect(await countQueries(() => catalogue.edition(wanted, ['male']))).toBe(0)
+    const alone = await countQueries(() => new Catalogue(dataSource).edition(wanted, ['male']))
     const crowd = new Catalogue(dataSource)
-    const together = await countQueries(dataSource, () =>
+    const together = await countQueries(() =>
       Promise.all(Array.from({ length: 20 }, () => crowd.edition(wanted, ['male']))),
     )
     expect(together).toBe(alone)
