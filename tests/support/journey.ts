@@ -15,16 +15,22 @@ export async function signIn(page: Page, person: Pick<DemoPerson, 'email' | 'rol
   await page.getByRole('heading', { level: 1 }).waitFor()
 }
 
-/** Waits until nothing on the page is still loading. */
+/** Waits until nothing on the page is still loading or moving. */
 export async function settled(page: Page): Promise<void> {
   await page.getByRole('heading', { level: 1 }).first().waitFor()
-  await page.locator('[aria-busy="true"]').first().waitFor({ state: 'detached' })
+  await page.waitForLoadState('networkidle')
+  await page.waitForFunction(
+    () =>
+      document.querySelector('[aria-busy="true"]') === null &&
+      document.getAnimations().every((animation) => animation.playState !== 'running'),
+  )
 }
 
 /** No violation of WCAG 2.2 AA, in light and in dark, and nothing wider than the screen. */
 export async function expectAccessible(page: Page, what: string): Promise<void> {
   for (const colorScheme of ['light', 'dark'] as const) {
     await page.emulateMedia({ colorScheme, reducedMotion: 'reduce' })
+    await settled(page)
     const { violations } = await new AxeBuilder({ page })
       .withTags(['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'])
       .analyze()
