@@ -219,7 +219,9 @@ export const preview = z.object({
     z.object({
       name: z.string(),
       /** Net muscle moment (N·m, N for force actions), strength and share of strength, per action that works here. */
-      actions: z.array(z.object({ action: z.enum(ACTIONS), moment: z.number(), strength: z.number(), demand: z.number() })),
+      actions: z.array(
+        z.object({ action: z.enum(ACTIONS), moment: z.number(), strength: z.number(), demand: z.number() }),
+      ),
       joints: z.array(jointStress),
       /** Compression at L5/S1 in kN. */
       compression: z.number(),

@@ -34,11 +34,11 @@ export const slot = z.object({
   intent,
   target: targetGroup,
   /** The swap standing in this slot, if one was taken. */
-  swap: z.object({ id, exercise: exerciseName, dose, takenAt: z.string(), can: z.object({ undo: z.boolean() }) }).nullable(),
+  swap: z
+    .object({ id, exercise: exerciseName, dose, takenAt: z.string(), can: z.object({ undo: z.boolean() }) })
+    .nullable(),
   /** What a sore joint means for what stands in this slot now; the worst joint first. Empty when it is unaffected. */
-  affected: z.array(
-    jointStress.extend({ verdict: z.enum(['overCap', 'redFlag']), soreJointId: id }),
-  ),
+  affected: z.array(jointStress.extend({ verdict: z.enum(['overCap', 'redFlag']), soreJointId: id })),
   can: z.object({ swap: z.boolean() }),
 })
 export type Slot = z.infer<typeof slot>
@@ -68,7 +68,8 @@ export type Today = z.infer<typeof today>
 export const getToday = endpoint({
   method: 'GET',
   path: '/api/athletes/:athleteId/today',
-  summary: 'The session planned for a day (the athlete’s calendar day), with what standing sore joints mean for each slot.',
+  summary:
+    'The session planned for a day (the athlete’s calendar day), with what standing sore joints mean for each slot.',
   access: 'signedIn',
   params: z.object({ athleteId: id }),
   query: z.object({ day }),

@@ -7,7 +7,15 @@ import { LIMITS } from './limits'
 export const joint = z.enum(JOINTS)
 
 /** What makes the joint speak up. */
-export const PROVOCATIONS = ['bending', 'straightening', 'gripping', 'leaning', 'endRange', 'twisting', 'unknown'] as const
+export const PROVOCATIONS = [
+  'bending',
+  'straightening',
+  'gripping',
+  'leaning',
+  'endRange',
+  'twisting',
+  'unknown',
+] as const
 export const provocation = z.enum(PROVOCATIONS)
 export type Provocation = z.infer<typeof provocation>
 
@@ -39,8 +47,10 @@ export const soreJointReport = z
   })
   .superRefine((report, context) => {
     const midline = MIDLINE_JOINTS.includes(report.joint)
-    if (midline && report.side !== null) context.addIssue({ code: 'custom', path: ['side'], message: 'This joint has no side.' })
-    if (!midline && report.side === null) context.addIssue({ code: 'custom', path: ['side'], message: 'Say which side.' })
+    if (midline && report.side !== null)
+      context.addIssue({ code: 'custom', path: ['side'], message: 'This joint has no side.' })
+    if (!midline && report.side === null)
+      context.addIssue({ code: 'custom', path: ['side'], message: 'Say which side.' })
   })
 export type SoreJointReport = z.infer<typeof soreJointReport>
 

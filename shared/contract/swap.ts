@@ -60,7 +60,9 @@ export const ranking = z.object({
     }),
   ),
   /** Standing red flags. Exercises that load these joints are never offered. */
-  redFlags: z.array(z.object({ soreJointId: id, joint, side: side.nullable(), flags: z.array(redFlag), urgent: z.boolean() })),
+  redFlags: z.array(
+    z.object({ soreJointId: id, joint, side: side.nullable(), flags: z.array(redFlag), urgent: z.boolean() }),
+  ),
   /** The original exercise as planned, for comparison; null when it is beyond current strength. */
   originalRow: swapRow.omit({ rank: true, score: true, factors: true, reason: true }).nullable(),
   /** True while strength is the average adult's, not fitted to this athlete. */

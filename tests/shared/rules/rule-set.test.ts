@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest'
 import { ruleSet as schema } from '#shared/contract/rule-set'
 import { ACTIONS, ACTION_JOINT, JOINTS } from '#shared/mechanics/index'
-import { MUSCLES, TARGET_GROUPS } from '#shared/rules/muscle-names'
+import { type MUSCLES, TARGET_GROUPS } from '#shared/rules/muscle-names'
 import { ruleSet } from './movements'
 
 /** Every cited leaf of the rule set. */

@@ -14,12 +14,7 @@ import { next } from '../factories'
 import type { TestApp } from '../test-app'
 
 /** The true exercises that tests of features train with: sore elbows on a pull day, and the work that spares them. */
-export const TEST_SLUGS = [
-  'pull-up-overhand',
-  'chin-up',
-  'lat-pulldown-overhand',
-  'lat-pulldown-neutral',
-] as const
+export const TEST_SLUGS = ['pull-up-overhand', 'chin-up', 'lat-pulldown-overhand', 'lat-pulldown-neutral'] as const
 export type TestSlug = (typeof TEST_SLUGS)[number]
 
 type AthleteInClub = User & { club: Club }
