@@ -11,4 +11,4 @@ if [ -z "${TEST_DATABASE_URL:-}" ]; then
   TEST_DATABASE_URL=$(sh server/scripts/postgres.sh test $$) || exit 1
   export TEST_DATABASE_URL
 fi
-NODE_ENV=production exec node --expose-gc --import tsx tests/bench/run.ts "$@"
+NODE_ENV=production exec node --import tsx tests/bench/run.ts "$@"

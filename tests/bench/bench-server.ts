@@ -32,13 +32,10 @@ const answer = <T>(child: ChildProcess): Promise<T> =>
     child.once('exit', (code) => reject(new Error(`The bench server stopped with ${code}.`)))
   })
 
-/** Runs the production app on a database and hands over its address and a way to ask for its memory. */
-export async function withServer<T>(
-  databaseUrl: string,
-  work: (server: { url: string; residentBytes(): Promise<number> }) => Promise<T>,
-): Promise<T> {
+/** Runs the production app, with the bare endpoint beside it, on a database and hands over its address. */
+export async function withServer<T>(databaseUrl: string, work: (url: string) => Promise<T>): Promise<T> {
   const child = fork(fileURLToPath(new URL('./server.ts', import.meta.url)), {
-    execArgv: ['--expose-gc', '--import', 'tsx'],
+    execArgv: ['--import', 'tsx'],
     env: {
       ...process.env,
       NODE_ENV: 'production',
@@ -52,14 +49,7 @@ export async function withServer<T>(
   })
   try {
     const { port } = await answer<{ port: number }>(child)
-    return await work({
-      url: `http://127.0.0.1:${port}`,
-      async residentBytes() {
-        const reply = answer<{ residentBytes: number }>(child)
-        child.send('memory')
-        return (await reply).residentBytes
-      },
-    })
+    return await work(`http://127.0.0.1:${port}`)
   } finally {
     child.removeAllListeners('exit')
     child.kill()

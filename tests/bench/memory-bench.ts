@@ -1,6 +1,8 @@
+import { readFileSync } from 'node:fs'
 import { createDataSource } from '#server/database/data-source'
 import type { Me } from '#shared/contract/me'
 import type { Today } from '#shared/contract/session'
+import { startBuiltServer } from '#tests/support/built-server'
 import { call, signInTo } from './bench-server'
 import type { BenchResult } from './result'
 
@@ -38,23 +40,34 @@ export async function growCatalogue(url: string): Promise<void> {
   }
 }
 
-/** Resident memory of the server once it has ranked from the grown catalogue a few times. */
+/** Resident memory of the built server, as the system counts it, once it has ranked from the grown catalogue a few times. */
 export async function benchMemory(
-  server: { url: string; residentBytes(): Promise<number> },
+  databaseUrl: string,
   account: { email: string; password: string },
   day: string,
 ): Promise<BenchResult> {
-  const cookie = await signInTo(server.url, account)
-  const me = await call<Me>(server.url, cookie, '/api/me')
-  const today = await call<Today>(server.url, cookie, `/api/athletes/${me.id}/today?day=${day}`)
-  for (const slot of today.session?.slots ?? []) {
-    for (const maxCoordination of [100, 80, 60, 40]) {
-      await call(server.url, cookie, `/api/slots/${slot.id}/swaps?maxCoordination=${maxCoordination}`)
+  const server = await startBuiltServer(databaseUrl)
+  try {
+    const cookie = await signInTo(server.url, account)
+    const me = await call<Me>(server.url, cookie, '/api/me')
+    const today = await call<Today>(server.url, cookie, `/api/athletes/${me.id}/today?day=${day}`)
+    for (const slot of today.session?.slots ?? []) {
+      for (const maxCoordination of [100, 80, 60, 40]) {
+        await call(server.url, cookie, `/api/slots/${slot.id}/swaps?maxCoordination=${maxCoordination}`)
+      }
     }
+    return {
+      name: `server memory with ${EXERCISES} exercises, MB`,
+      ratio: residentBytes(server.process.pid) / 1e6,
+      atMost: 300,
+    }
+  } finally {
+    await server.stop()
   }
-  return {
-    name: `server memory with ${EXERCISES} exercises, MB`,
-    ratio: (await server.residentBytes()) / 1e6,
-    atMost: 300,
-  }
+}
+
+function residentBytes(pid: number | undefined): number {
+  const status = readFileSync(`/proc/${pid}/status`, 'utf8')
+  const kibibytes = Number(/^VmRSS:\s+(\d+) kB$/m.exec(status)?.[1])
+  return kibibytes * 1024
 }

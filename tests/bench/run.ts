@@ -18,11 +18,11 @@ const day = new Date().toISOString().slice(0, 10)
 const BENCHES: Record<string, () => Promise<BenchResult[]>> = {
   ranking: async () => benchRanking(),
   endpoint: () =>
-    withSeededDatabase(adminUrl, (url) => withServer(url, (server) => benchEndpoint(server.url, account, day))),
+    withSeededDatabase(adminUrl, (url) => withServer(url, (address) => benchEndpoint(address, account, day))),
   memory: () =>
     withSeededDatabase(adminUrl, async (url) => {
       await growCatalogue(url)
-      return [await withServer(url, (server) => benchMemory(server, account, day))]
+      return [await benchMemory(url, account, day)]
     }),
 }
 

@@ -41,10 +41,4 @@ const dependencies = await createDependencies(parseEnv(process.env))
 const server = createApp(dependencies, [bareRoutes]).listen(0, '127.0.0.1', () => {
   process.send?.({ port: (server.address() as AddressInfo).port })
 })
-process.on('message', (message) => {
-  if (message === 'memory') {
-    global.gc?.()
-    process.send?.({ residentBytes: process.memoryUsage().rss })
-  }
-})
 process.on('disconnect', () => process.exit(0))
