@@ -17,6 +17,8 @@ export const LIMITS = {
   repetitions: { min: 1, max: 100 },
   holdSeconds: { min: 1, max: 300 },
   rir: { min: 0, max: 10 },
+  /** Rows of a ranking that are sent: the best, and what was left out, most telling reasons first. */
+  rankingRows: { items: 500, leftOut: 500 },
   /** Bytes of a JSON request body. */
   requestBody: 256 * 1024,
 } as const

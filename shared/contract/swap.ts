@@ -69,7 +69,12 @@ export const ranking = z.object({
   estimated: z.boolean(),
   /** True for athletes under 18: the strength norms are not valid for them. */
   minor: z.boolean(),
+  /** The best rows, at most `LIMITS.rankingRows.items`. */
   items: z.array(swapRow),
+  /**
+   * By name. Where there are more than `LIMITS.rankingRows.leftOut`, those that do
+   * not train the target are dropped first.
+   */
   leftOut: z.array(leftOutRow),
 })
 export type Ranking = z.infer<typeof ranking>

@@ -1,6 +1,7 @@
 import { createHash } from 'node:crypto'
 import type { Guidance } from '#shared/mechanics/vocabulary'
-import type { Ranking } from '#shared/contract/swap'
+import { LIMITS } from '#shared/contract/limits'
+import type { LeftOutRow, Ranking } from '#shared/contract/swap'
 import { rank, type Athlete, type Candidate, type Place } from '#shared/rules/index'
 import { AppError, notFound } from '../../errors'
 import { toAthlete } from '../athletes/engine-athlete'
@@ -84,7 +85,21 @@ export function buildRanking(
     target,
     placeId: inputs.place?.id ?? null,
     ...result,
+    items: result.items.slice(0, LIMITS.rankingRows.items),
+    leftOut: mostTelling(result.leftOut),
   }
+}
+
+/**
+ * What is left out of a long catalogue, cut to what somebody may want to read: that an exercise does not train the target
+ * goes without saying, so those go first. The order by name stays.
+ */
+export function mostTelling(leftOut: readonly LeftOutRow[], most: number = LIMITS.rankingRows.leftOut): LeftOutRow[] {
+  if (leftOut.length <= most) return [...leftOut]
+  const telling = leftOut.filter(({ why }) => why !== 'targetNotTrained').slice(0, most)
+  const others = leftOut.filter(({ why }) => why === 'targetNotTrained').slice(0, most - telling.length)
+  const kept = new Set([...telling, ...others])
+  return leftOut.filter((row) => kept.has(row))
 }
 
 /** Swaps may be taken from this table unless a red flag has emptied it. */

@@ -3,7 +3,6 @@ import type { Ranking } from '#shared/contract/swap'
 import type { Catalogue } from '../exercises/catalogue'
 import { buildRanking, fingerprintOf, type RankingFilters } from './build-ranking'
 import type { RankingInputs } from './ranking-inputs'
-import { serializeRanking } from './serialize-ranking'
 
 /** Bytes of finished tables that are kept. */
 const MEMORY = 16 * 1024 * 1024
@@ -23,7 +22,7 @@ export class RankingMemory {
     const known = this.tables.get(key)
     if (known !== undefined) return known
     const edition = await this.catalogue.edition(inputs, [inputs.profile.sex])
-    const made = serializeRanking(buildRanking(inputs, filters, edition, now))
+    const made = Buffer.from(JSON.stringify(buildRanking(inputs, filters, edition, now)))
     this.tables.set(key, made)
     return made
   }
