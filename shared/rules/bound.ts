@@ -1,13 +1,14 @@
-import { ACTION_JOINT, FORCE_ACTIONS, JOINTS, type Action, type Joint } from '../mechanics/vocabulary'
+import { ACTION_JOINT, JOINTS, type Joint } from '../mechanics/vocabulary'
 import type { RankContext } from './context'
 import { intensity } from './dose'
 import { GRAVITY } from './efforts'
 import { groupRoleIn, rolesIn } from './muscles'
 import { MUSCLES } from './muscle-names'
-import { KEYS, NOBODY, PUSH, slopeOf, STRIDE, type PackedCatalogue } from './pack'
+import { KEYS, NOBODY } from './keys'
+import { CODE, EXTRA, HEAD, LOAD_KINDS, ROW, slopeOf, SPINE, type PackedCatalogue } from './pack'
+import { gainsOf } from './reach'
 import { calmOf, keptOf, leanOf, likeness, spareOf } from './score'
 import { roundLoad, type Settings } from './settings'
-import { pushReference } from './stress'
 import type { StressChannel } from './types'
 
 /** An athlete's ranking as tables by packed key. */
@@ -17,15 +18,17 @@ export interface BoundTables {
   gain: Float64Array
   role: Float64Array
   serves: Uint8Array
-  /** Largest stress allowed at a key, Infinity where nothing caps it. */
-  cap: Float64Array
-  /** The same by joint and extra channel. */
+  /** Largest stress allowed, by joint and extra channel. */
   extraCap: Float64Array
-  capsSpine: boolean
-  /** Whether any key is capped. */
-  capsTerms: boolean
+  capsExtras: boolean
+  /** Cap on L5/S1 compression as a share of what counts as 1, that share per N, and stature ÷ arm of the back muscles. */
+  spineCap: number
+  spineGain: number
+  spineArm: number
   /** Planned intensity ÷ gain: what strength leaves of a load per unit of size. */
   reach: Float64Array
+  /** Cap ÷ gain, Infinity where nothing caps it. */
+  capReach: Float64Array
   /** Roles of every muscle, key by key. */
   muscleRoles: Float64Array
   /** Working space: demands by key, loads by muscle, and the share used of the tightest cap. */
@@ -52,24 +55,20 @@ export function boundTables(context: RankContext): BoundTables {
   const { athlete, target } = request
   const { wrist, elbow } = ruleSet.stress.grip.value
   const size = (make: (key: number) => number) => Float64Array.from(KEYS, (_, key) => make(key))
-  const strengthAt = (action: Action, carried: boolean) => (carried ? tables.carried : tables.working)[action]
   const gripCap = Math.min(limitOf(context, 'wrist', 'grip') / wrist, limitOf(context, 'elbow', 'gripPull') / elbow)
   const role = size((key) => {
     const { action, grip } = KEYS[key]!
     return action === null ? 0 : groupRoleIn(action, target, grip ?? 'none', ruleSet)
   })
-  const gain = size((key) => {
-    const { action, carried } = KEYS[key]!
-    if (key === PUSH) return GRAVITY / pushReference(athlete, ruleSet)
-    if (action === null) return 0
-    const arm = FORCE_ACTIONS.includes(action) ? 1 : athlete.stature
-    return (GRAVITY * arm) / strengthAt(action, carried)
-  })
+  const gain = gainsOf(athlete, tables, ruleSet)
   const cap = size((key) => {
     const { action } = KEYS[key]!
     if (action === null) return Number.POSITIVE_INFINITY
     return action === 'grip' ? gripCap : limitOf(context, ACTION_JOINT[action], action)
   })
+  const extraCap = Float64Array.from(
+    JOINTS.flatMap((joint) => [limitOf(context, joint, 'leaning'), limitOf(context, joint, 'endRange')]),
+  )
   return {
     context,
     mass: athlete.bodyMass,
@@ -80,18 +79,33 @@ export function boundTables(context: RankContext): BoundTables {
         action === null ? MUSCLES.map(() => 0) : rolesIn(action, grip ?? 'none', ruleSet),
       ),
     ),
-    capsTerms: cap.some((limit) => limit !== Number.POSITIVE_INFINITY),
+    capReach: cap.map((limit, key) => limit / gain[key]!),
     loads: new Float64Array(MUSCLES.length),
     use: 0,
     role,
     serves: Uint8Array.from(role, (share) => (share >= ruleSet.score.servesFrom.value ? 1 : 0)),
-    cap,
-    extraCap: Float64Array.from(
-      JOINTS.flatMap((joint) => [limitOf(context, joint, 'leaning'), limitOf(context, joint, 'endRange')]),
-    ),
-    capsSpine: limitOf(context, 'lowerBack', 'leaning') !== Number.POSITIVE_INFINITY,
+    extraCap,
+    capsExtras: extraCap.some((limit) => limit !== Number.POSITIVE_INFINITY),
+    spineCap: limitOf(context, 'lowerBack', 'leaning'),
+    spineGain: GRAVITY / ruleSet.stress.compressionFull.value,
+    spineArm: athlete.stature / ruleSet.stress.backMuscleArm.value,
     keyMost: new Float64Array(KEYS.length),
   }
+}
+
+/**
+ * How far the athlete's strengths can lift a target drive above what `reach` says for the average adult's: the largest ratio
+ * between a key that serves the target and any other.
+ */
+export function spreadOf({ gain, role, mass }: BoundTables, { averageGain }: PackedCatalogue): number {
+  let most = 0
+  let least = Number.POSITIVE_INFINITY
+  for (let key = 0; key < NOBODY; key++) {
+    const ratio = (gain[key]! * mass) / averageGain[key]!
+    if (role[key]! > 0 && ratio > most) most = ratio
+    if (ratio < least) least = ratio
+  }
+  return (most / least) * RAISED
 }
 
 /** Loads that strength and caps leave, kg. */
@@ -102,45 +116,61 @@ interface Ends {
   allowedMost: number
 }
 
-function endsOf(packed: PackedCatalogue, at: number, tables: BoundTables, ends: Ends): void {
-  const { highKey, lowKey, terms, motion } = packed
-  const { reach, cap, mass, capsTerms } = tables
+function endsOf({ numbers, words }: PackedCatalogue, block: number, tables: BoundTables, ends: Ends): void {
+  const { reach, capReach, mass } = tables
   let strongLeast = Number.NEGATIVE_INFINITY
   let strongMost = Number.POSITIVE_INFINITY
-  const first = packed.termStart[at]!
-  const end = packed.termStart[at + 1]!
-  for (let t = first, r = STRIDE * first; t < end; t++, r += STRIDE) {
-    const moved = mass * terms[r + 2]!
-    const most = reach[highKey[t]!]! * terms[r]! - moved
-    const least = -reach[lowKey[t]!]! * terms[r + 1]! - moved
-    if (most < strongMost) strongMost = most
-    if (least > strongLeast) strongLeast = least
+  let allowedLeast = Number.NEGATIVE_INFINITY
+  let allowedMost = Number.POSITIVE_INFINITY
+  const end = block + HEAD.size + ROW * numbers[block]!
+  for (let r = block + HEAD.size; r < end; r += ROW) {
+    const key = words[2 * r + 7]!
+    const inverse = numbers[r]!
+    const moved = mass * numbers[r + 1]!
+    const edge = reach[key]! * inverse - moved
+    if (inverse > 0) {
+      if (edge < strongMost) strongMost = edge
+    } else if (edge > strongLeast) strongLeast = edge
+    const capped = capReach[key]!
+    if (capped !== Number.POSITIVE_INFINITY) {
+      const limit = (capped / numbers[r + 2]!) * inverse - moved
+      if (inverse > 0) {
+        if (limit < allowedMost) allowedMost = limit
+      } else if (limit > allowedLeast) allowedLeast = limit
+    }
   }
   ends.strongLeast = strongLeast
   ends.strongMost = strongMost
-  ends.allowedLeast = Number.NEGATIVE_INFINITY
-  ends.allowedMost = Number.POSITIVE_INFINITY
-  if (capsTerms) {
-    const share = tables.context.original.intensity
-    for (let t = first, r = STRIDE * first; t < end; t++, r += STRIDE) {
-      const above = highKey[t]!
-      const below = lowKey[t]!
-      if (cap[above]! === Number.POSITIVE_INFINITY && cap[below]! === Number.POSITIVE_INFINITY) continue
-      const moved = mass * terms[r + 2]!
-      const scale = 1 / (share * motion[t]!)
-      const most = cap[above]! * scale * reach[above]! * terms[r]! - moved
-      const least = -cap[below]! * scale * reach[below]! * terms[r + 1]! - moved
-      if (most < ends.allowedMost) ends.allowedMost = most
-      if (least > ends.allowedLeast) ends.allowedLeast = least
+  ends.allowedLeast = allowedLeast
+  ends.allowedMost = allowedMost
+  if (tables.capsExtras) {
+    const last = end + EXTRA * numbers[block + HEAD.extras]!
+    for (let e = end; e < last; e += EXTRA) {
+      const limit = tables.extraCap[Math.floor(numbers[e]! / CODE)]!
+      if (limit === Number.POSITIVE_INFINITY) continue
+      cutEnds(ends, numbers[e + 1]! * tables.gain[numbers[e]! % CODE]!, mass * numbers[e + 2]!, limit)
     }
   }
-  const last = packed.extraStart[at + 1]!
-  for (let e = packed.extraStart[at]!; e < last; e++) {
-    const limit = tables.extraCap[packed.extraChannel[e]!]!
-    if (limit === Number.POSITIVE_INFINITY) continue
-    cutEnds(ends, packed.extraSize[e]! * tables.gain[packed.extraKey[e]!]!, mass * packed.extraShift[e]!, limit)
+  if (tables.spineCap === Number.POSITIVE_INFINITY) return
+  const spine = end + EXTRA * numbers[block + HEAD.extras]!
+  for (let f = 0; f < numbers[block + HEAD.frames]!; f++) {
+    cutSpine(numbers, spine + SPINE * f, tables.spineArm, tables, ends)
+    cutSpine(numbers, spine + SPINE * f, -tables.spineArm, tables, ends)
   }
-  if (tables.capsSpine) eachSpine(packed, at, tables, (slope, moved, limit) => cutEnds(ends, slope, moved, limit))
+}
+
+/** Cuts by one of the two forms of L5/S1 compression in a frame. */
+function cutSpine(
+  numbers: Float64Array,
+  at: number,
+  arm: number,
+  { mass, spineGain, spineCap }: BoundTables,
+  ends: Ends,
+) {
+  const a = arm * numbers[at]! - numbers[at + 2]!
+  const b = arm * numbers[at + 1]! - numbers[at + 3]!
+  const slope = slopeOf(a, b)
+  cutEnds(ends, spineGain * slope, (mass * a) / slope, spineCap)
 }
 
 function cutEnds(ends: Ends, slope: number, moved: number, limit: number): void {
@@ -150,24 +180,19 @@ function cutEnds(ends: Ends, slope: number, moved: number, limit: number): void 
   } else if (edge > ends.allowedLeast) ends.allowedLeast = edge
 }
 
-/** L5/S1 compression of every frame as two one-sided forms slope × (L + moved), a share of what counts as 1. */
-function eachSpine(
-  packed: PackedCatalogue,
-  at: number,
-  { context, mass }: BoundTables,
-  visit: (slope: number, moved: number, limit: number) => void,
-): void {
-  const { backMuscleArm, compressionFull } = context.ruleSet.stress
-  const limit = limitOf(context, 'lowerBack', 'leaning')
-  const arms = context.request.athlete.stature / backMuscleArm.value
-  for (let f = packed.frameStart[at]!; f < packed.frameStart[at + 1]!; f++) {
-    for (const arm of [arms, -arms]) {
-      const a = arm * packed.spine[4 * f]! - packed.spine[4 * f + 2]!
-      const b = arm * packed.spine[4 * f + 1]! - packed.spine[4 * f + 3]!
-      const slope = slopeOf(a, b)
-      visit((GRAVITY * slope) / compressionFull.value, (mass * a) / slope, limit)
-    }
-  }
+/** A block's settings, one object for all blocks. */
+const SETTINGS: Settings = { kind: 'none', lightest: 0, heaviest: 0, steps: null }
+const STEPS = { first: 0, step: 0, last: 0 }
+
+function readSettings(numbers: Float64Array, block: number): Settings {
+  SETTINGS.kind = LOAD_KINDS[numbers[block + HEAD.kind]!] ?? 'none'
+  SETTINGS.lightest = numbers[block + HEAD.lightest]!
+  SETTINGS.heaviest = numbers[block + HEAD.heaviest]!
+  STEPS.first = numbers[block + HEAD.first]!
+  STEPS.step = numbers[block + HEAD.step]!
+  STEPS.last = numbers[block + HEAD.last]!
+  SETTINGS.steps = STEPS.step > 0 ? STEPS : null
+  return SETTINGS
 }
 
 /** The working load, or null where rounding could tip it to another setting. */
@@ -175,6 +200,8 @@ function loadOf({ strongLeast, strongMost, allowedLeast, allowedMost }: Ends, se
   const { kind, lightest, heaviest } = settings
   if (kind === 'none') return 0
   if (close(strongLeast, strongMost) || close(allowedLeast, allowedMost)) return null
+  // Rows never at work are left away, and with them ends of assistance beyond none; they could matter only here.
+  if (kind === 'assistance' && Math.max(strongLeast, allowedLeast) > -SLACK) return null
   const strong = strongLeast <= strongMost ? strongMost : Number.NEGATIVE_INFINITY
   const allowed = allowedLeast <= allowedMost ? allowedMost : Number.NEGATIVE_INFINITY
   const most = Math.min(strong, allowed)
@@ -205,17 +232,19 @@ function keptAtMost(demand: number, { original, request, ruleSet }: RankContext)
 
 const ENDS: Ends = { strongLeast: 0, strongMost: 0, allowedLeast: 0, allowedMost: 0 }
 
-/** The target's drive at a load: the terms that serve it alone. */
-function driveAt(packed: PackedCatalogue, at: number, load: number, { gain, role, mass }: BoundTables): number {
-  const { highKey, lowKey, terms, trains } = packed
+/** The target's drive at a load: the rows that serve it alone. */
+function driveAt(
+  { numbers, singles, words }: PackedCatalogue,
+  block: number,
+  load: number,
+  { gain, role, mass }: BoundTables,
+): number {
   let drive = 0
-  const end = packed.termStart[at + 1]!
-  for (let t = packed.termStart[at]!; t < end; t++) {
-    if (role[highKey[t]!]! === 0 && role[lowKey[t]!]! === 0) continue
-    const r = STRIDE * t
-    const y = load + mass * terms[r + 2]!
-    const key = y >= 0 ? highKey[t]! : lowKey[t]!
-    const value = (y >= 0 ? (y * gain[key]!) / terms[r]! : (-y * gain[key]!) / terms[r + 1]!) * trains[t]! * role[key]!
+  const end = block + HEAD.size + ROW * numbers[block]!
+  for (let r = block + HEAD.size; r < end; r += ROW) {
+    const key = words[2 * r + 7]!
+    if (role[key] === 0) continue
+    const value = ((load + mass * numbers[r + 1]!) / numbers[r]!) * gain[key]! * singles[2 * r + 6]! * role[key]!
     if (value > drive) drive = value
   }
   return drive
@@ -225,41 +254,49 @@ function driveAt(packed: PackedCatalogue, at: number, load: number, { gain, role
  * The largest demand at a load, stopped as soon as it passes `enough`; leaves every key's largest demand in the tables and the
  * largest share of a cap used in `tables.use`.
  */
-function demandAt(packed: PackedCatalogue, at: number, load: number, tables: BoundTables, enough: number): number {
-  const { highKey, lowKey, terms, motion } = packed
-  const { gain, cap, mass, keyMost } = tables
+function demandAt(
+  { numbers, words }: PackedCatalogue,
+  block: number,
+  load: number,
+  tables: BoundTables,
+  enough: number,
+): number {
+  const { gain, capReach, mass, keyMost } = tables
   keyMost.fill(0)
   let demand = 0
   let use = 0
-  const first = packed.termStart[at]!
-  const end = packed.termStart[at + 1]!
-  for (let t = first, r = STRIDE * first; t < end; t++, r += STRIDE) {
-    const y = load + mass * terms[r + 2]!
-    const key = y >= 0 ? highKey[t]! : lowKey[t]!
-    const value = y >= 0 ? (y * gain[key]!) / terms[r]! : (-y * gain[key]!) / terms[r + 1]!
+  const end = block + HEAD.size + ROW * numbers[block]!
+  for (let r = block + HEAD.size; r < end; r += ROW) {
+    const pull = (load + mass * numbers[r + 1]!) / numbers[r]!
+    if (pull <= 0) continue
+    const key = words[2 * r + 7]!
+    const value = pull * gain[key]!
     if (value > keyMost[key]!) keyMost[key] = value
     if (value > demand) {
       demand = value
       if (demand > enough) return demand
     }
-    if (cap[key]! !== Number.POSITIVE_INFINITY) {
-      const used = (value * motion[t]!) / cap[key]!
+    const used = (pull * numbers[r + 2]!) / capReach[key]!
+    if (used > use) use = used
+  }
+  if (tables.capsExtras) {
+    const last = end + EXTRA * numbers[block + HEAD.extras]!
+    for (let e = end; e < last; e += EXTRA) {
+      const limit = tables.extraCap[Math.floor(numbers[e]! / CODE)]!
+      if (limit === Number.POSITIVE_INFINITY) continue
+      const size = numbers[e + 1]! * gain[numbers[e]! % CODE]!
+      const used = (size * (load + mass * numbers[e + 2]!)) / limit
       if (used > use) use = used
     }
   }
-  const last = packed.extraStart[at + 1]!
-  for (let e = packed.extraStart[at]!; e < last; e++) {
-    const limit = tables.extraCap[packed.extraChannel[e]!]!
-    if (limit === Number.POSITIVE_INFINITY) continue
-    const size = packed.extraSize[e]! * gain[packed.extraKey[e]!]!
-    const used = (size * (load + mass * packed.extraShift[e]!)) / limit
-    if (used > use) use = used
-  }
-  if (tables.capsSpine) {
-    eachSpine(packed, at, tables, (slope, moved, limit) => {
-      const used = (slope * (load + moved)) / limit
+  if (tables.spineCap !== Number.POSITIVE_INFINITY) {
+    const spine = end + EXTRA * numbers[block + HEAD.extras]!
+    for (let f = spine; f < spine + SPINE * numbers[block + HEAD.frames]!; f += SPINE) {
+      const moment = numbers[f]! * mass + numbers[f + 1]! * load
+      const axial = numbers[f + 2]! * mass + numbers[f + 3]! * load
+      const used = (tables.spineGain * (tables.spineArm * Math.abs(moment) - axial)) / tables.spineCap
       if (used > use) use = used
-    })
+    }
   }
   tables.use = use
   return demand
@@ -279,17 +316,16 @@ export function scoreBound(
   const { keyMost, context } = tables
   const { ruleSet, request } = context
   const { leastTargetDrive, leastKept } = ruleSet.score
-  const settings = packed.settings[at]
-  if (!settings) return -1
-  endsOf(packed, at, tables, ENDS)
-  const load = loadOf(ENDS, settings)
+  const block = packed.start[at]!
+  endsOf(packed, block, tables, ENDS)
+  const load = loadOf(ENDS, readSettings(packed.numbers, block))
   if (load === null) return whole
-  const drive = driveAt(packed, at, load, tables)
+  const drive = driveAt(packed, block, load, tables)
   const calm = calmOf(packed.coordination[at]!, request.intent, ruleSet)
   // The least target drive that still lets the exercise in, and into the wanted rows.
   const standard = Math.max(context.originalDrive, leastTargetDrive.value)
   const needed = Math.max(leastTargetDrive.value, (standard * wanted) / (100 * calm)) - SLACK
-  const demand = demandAt(packed, at, load, tables, drive / needed)
+  const demand = demandAt(packed, block, load, tables, drive / needed)
   if (demand === 0 || demand * needed > drive) return -1
   const { use } = tables
   if (Math.abs(demand - context.original.intensity) < SLACK || Math.abs(use - 1) < SLACK) return whole

@@ -1,6 +1,6 @@
 import { SKILL_GRADES } from '../contract/exercise'
 import type { RuleSet } from '../contract/rule-set'
-import { boundTables, carryOverBound, scoreBound } from './bound'
+import { boundTables, carryOverBound, scoreBound, spreadOf } from './bound'
 import { contextOf, type RankContext } from './context'
 import { MaxHeap } from './max-heap'
 import { TARGET_GROUP_NAMES } from './muscle-names'
@@ -52,7 +52,7 @@ function bestRows(
   count: number,
 ): Unranked[] {
   const tables = boundTables(context)
-  const { order, edges } = sortByFirstBound(context, packed)
+  const { order, edges } = sortByFirstBound(context, packed, spreadOf(tables, packed))
   const rows: Unranked[] = []
   // Scores enter negated: the heap's top is then the worst of the best `count`.
   const scores = new MaxHeap()
@@ -101,23 +101,33 @@ function bestRows(
 const upperEdge = (bin: number): number => (100 * (BINS - bin)) / BINS + 1e-3
 
 /** Indices in descending bins of the first bound, what cannot be offered left away; a counting sort. */
-function sortByFirstBound(context: RankContext, packed: PackedCatalogue): { order: Uint32Array; edges: Uint32Array } {
+export function sortByFirstBound(
+  context: RankContext,
+  packed: PackedCatalogue,
+  spread: number,
+): { order: Uint32Array; edges: Uint32Array } {
   const { request, ruleSet, originalDrive } = context
-  const potentials = packed.potential[TARGET_GROUP_NAMES.indexOf(request.target)]!
+  const group = TARGET_GROUP_NAMES.indexOf(request.target)
+  const potentials = packed.potential[group]!
+  const reaches = packed.reach[group]!
   const { leastTargetDrive } = ruleSet.score
   const highest = SKILL_GRADES.indexOf(request.athlete.skill)
   const standard = Math.max(originalDrive, leastTargetDrive.value)
-  const skipped = considersOriginal(context) ? -1 : packed.ids.indexOf(request.original.id)
+  const { coordination, skill } = packed
+  const calmest = calmOf(0, request.intent, ruleSet)
+  const slope = (calmOf(100, request.intent, ruleSet) - calmest) / 100
+  const least = leastTargetDrive.value - 1e-9
+  const skipped = considersOriginal(context) ? -1 : (packed.positions.get(request.original.id) ?? -1)
   const binOf = new Int16Array(packed.count)
   const edges = new Uint32Array(BINS + 1)
   for (let index = 0; index < packed.count; index++) {
-    const potential = potentials[index]!
-    if (packed.skill[index]! > highest || potential < leastTargetDrive.value - 1e-9 || index === skipped) {
+    const potential = Math.min(potentials[index]!, reaches[index]! * spread)
+    if (skill[index]! > highest || potential < least || index === skipped) {
       binOf[index] = -1
       continue
     }
-    const calm = calmOf(packed.coordination[index]!, request.intent, ruleSet)
-    const first = calm * Math.min(1, potential / standard)
+    // calmOf is a straight line.
+    const first = (calmest + slope * coordination[index]!) * Math.min(1, potential / standard)
     const bin = Math.min(BINS - 1, Math.max(0, Math.floor((1 - first) * BINS)))
     binOf[index] = bin
     edges[bin + 1]!++

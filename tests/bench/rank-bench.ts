@@ -56,7 +56,7 @@ function timed(work: () => unknown): number {
  * single exercises are, with the exercise at hand as it would be.
  */
 export function benchRanking(): BenchResult[] {
-  const packed = packCatalogue(catalogue, null, ruleSet)
+  const packed = packCatalogue(catalogue, { sex: 'male', place: null }, ruleSet)
   const table = coefficients()
   const known = new Map<number, Candidate>()
   const candidateAt = (index: number): Candidate => {

@@ -3,9 +3,17 @@ import { describe, expect, it } from 'vitest'
 import { EQUIPMENT } from '#shared/contract/place'
 import { INTENTS } from '#shared/contract/session'
 import { PROVOCATIONS } from '#shared/contract/sore-joint'
-import { JOINTS, MIDLINE_JOINTS, SEXES, type Side } from '#shared/mechanics/index'
+import { JOINTS, MIDLINE_JOINTS, SEXES, type Sex, type Side } from '#shared/mechanics/index'
 import { TARGET_GROUP_NAMES } from '#shared/rules/muscle-names'
-import { packCatalogue, rank, rankTop, type Place, type RankRequest, type SoreJointInput } from '#shared/rules/index'
+import {
+  packCatalogue,
+  rank,
+  rankTop,
+  type PackedCatalogue,
+  type Place,
+  type RankRequest,
+  type SoreJointInput,
+} from '#shared/rules/index'
 import { candidatesFor, requestOf, ruleSet, soreJoint } from './movements'
 import { generator, syntheticCandidate } from './synthetic'
 
@@ -21,7 +29,13 @@ const YARD: Place = {
   ),
 }
 const PLACES = [null, YARD]
-const PACKED = PLACES.map((place) => packCatalogue(ALL, place, ruleSet))
+const PACKED = PLACES.map(
+  (place) =>
+    Object.fromEntries(SEXES.map((sex) => [sex, packCatalogue(ALL, { sex, place }, ruleSet)])) as Record<
+      Sex,
+      PackedCatalogue
+    >,
+)
 
 const request = fc
   .record({
@@ -70,7 +84,7 @@ describe('the first rows of a packed catalogue', { timeout: 60_000 }, () => {
       fc.property(request, fc.integer({ min: 1, max: 60 }), ({ request: asked, place }, count) => {
         const plain = rank(asked, ruleSet)
         const fast = rankTop(
-          { request: asked, packed: PACKED[place]!, candidateAt: (index) => ALL[index]!, count },
+          { request: asked, packed: PACKED[place]![asked.athlete.sex], candidateAt: (index) => ALL[index]!, count },
           ruleSet,
         )
         offered += plain.items.length
@@ -85,7 +99,7 @@ describe('the first rows of a packed catalogue', { timeout: 60_000 }, () => {
 
   it('are those of the plain ranking on true movements, for every target and sore joint', () => {
     const candidates = candidatesFor('male')
-    const packed = packCatalogue(candidates, null, ruleSet)
+    const packed = packCatalogue(candidates, { sex: 'male', place: null }, ruleSet)
     for (const target of TARGET_GROUP_NAMES) {
       for (const joint of JOINTS) {
         const side = MIDLINE_JOINTS.includes(joint) ? null : ('left' as const)
@@ -101,14 +115,14 @@ describe('the first rows of a packed catalogue', { timeout: 60_000 }, () => {
     const looked = new Set<number>()
     const asked = requestOf({ candidates: ALL, original: candidatesFor('male')[0]! })
     const candidateAt = (index: number) => (looked.add(index), ALL[index]!)
-    const fast = rankTop({ request: asked, packed: PACKED[0]!, candidateAt, count: 10 }, ruleSet)
+    const fast = rankTop({ request: asked, packed: PACKED[0]!.male, candidateAt, count: 10 }, ruleSet)
     expect(fast.items).toHaveLength(10)
     expect(looked.size).toBeLessThan(30)
   })
 
   it('keep a red flag’s word', () => {
     const candidates = candidatesFor('male')
-    const packed = packCatalogue(candidates, null, ruleSet)
+    const packed = packCatalogue(candidates, { sex: 'male', place: null }, ruleSet)
     const candidateAt = (index: number) => candidates[index]!
     for (const joint of ['elbow', 'knee'] as const) {
       const asked = requestOf({
