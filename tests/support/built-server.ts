@@ -60,7 +60,8 @@ export async function startBuiltServer(databaseUrl: string): Promise<BuiltServer
   const [port, mailPort] = [await freePort(), await freePort()]
   const env = settings(databaseUrl, port, mailPort)
   await run('node', ['--enable-source-maps', 'dist/server/seed.js'], { env })
-  const child = spawn('node', ['--enable-source-maps', 'dist/server/main.js'], {
+  const heap = ['--max-semi-space-size=4', '--max-old-space-size=256']
+  const child = spawn('node', [...heap, '--enable-source-maps', 'dist/server/main.js'], {
     env,
     stdio: ['ignore', 'pipe', 'pipe'],
   })
