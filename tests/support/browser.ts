@@ -1,26 +1,8 @@
-import { existsSync } from 'node:fs'
-import { chromium, type Browser, type BrowserContextOptions, type Page } from 'playwright-core'
+import type { Browser, BrowserContextOptions, Page } from 'playwright-core'
 import { afterAll, afterEach, beforeAll, expect, inject } from 'vitest'
-
-const FLAGS = [
-  '--headless',
-  '--no-sandbox',
-  '--disable-gpu',
-  '--disable-quic',
-  '--no-first-run',
-  '--disable-background-networking',
-  '--disable-component-update',
-  '--disable-sync',
-]
-const PLACES = [process.env.CHROMIUM, '/usr/bin/chromium', '/usr/bin/chromium-browser', '/usr/bin/google-chrome']
+import { launchBrowser } from './browser-launch'
 
 export const SIZES = { phone: { width: 360, height: 740 }, desk: { width: 1280, height: 800 } } as const
-
-export function launchBrowser(): Promise<Browser> {
-  const executablePath = PLACES.find((path) => path !== undefined && existsSync(path))
-  if (executablePath === undefined) throw new Error('Chromium is missing: install it, or name it in CHROMIUM.')
-  return chromium.launch({ executablePath, args: FLAGS })
-}
 
 /**
  * A browser for one test file; call it at the top and open pages of the demo inside tests. A page that complains in its

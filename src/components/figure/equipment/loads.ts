@@ -44,7 +44,8 @@ function held(
 ): Shape[] {
   const sides = uses.flatMap(({ side }) => (side === null ? [] : [side]))
   const toward = uses.flatMap(({ line: { toward } }) => (toward === undefined ? [] : [toward]))
-  const oneBar = sides.length === 2 && uses[0]!.load.share !== 'each' && mechanics.grip !== 'neutral'
+  const barHeld = mechanics.grip === 'overhand' || mechanics.grip === 'underhand'
+  const oneBar = sides.length === 2 && uses[0]!.load.share !== 'each' && barHeld
   if (toward.length > 0) {
     const own = typeof uses[0]!.load.direction === 'object' && 'lateral' in uses[0]!.load.direction
     const handles =
@@ -57,7 +58,7 @@ function held(
   }
   const direction = uses[0]!.line.direction
   const free = mechanics.guidance === 'freeWeight' || mechanics.guidance === 'ownBody'
-  const shared = sides.length === 2 && uses[0]!.load.share !== 'each' && mechanics.grip === 'neutral'
+  const shared = sides.length === 2 && uses[0]!.load.share !== 'each' && !barHeld
   const implement = free
     ? shared
       ? sharedDumbbell(view, middleOf(pose, 'grip'), gripAxis(pose, 'right', mechanics))
