@@ -22,7 +22,10 @@ let testsRun = 0
 
 const run = (command: string, args: string[], env: Record<string, string> = {}): Promise<number> =>
   new Promise((resolve) => {
-    const child = spawn(command, args, { stdio: ['ignore', 'inherit', 'inherit'], env: { ...process.env, ...env } })
+    const child = spawn(command, args, {
+      stdio: ['ignore', 'inherit', 'inherit'],
+      env: { ...process.env, NO_COLOR: '1', ...env },
+    })
     child.once('error', () => resolve(1))
     child.once('exit', (code) => resolve(code ?? 1))
   })

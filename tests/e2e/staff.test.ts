@@ -91,7 +91,7 @@ describe('coach, physio and admin', () => {
     await expect.poll(() => resetLink()).toMatch(/^\/reset-password#token=/)
     await page.goto((await resetLink()) ?? '')
     const next = 'a quite new password'
-    for (const field of await page.locator('input[type=password]').all()) await field.fill(next)
+    await page.getByLabel('New password').fill(next)
     await page.getByRole('button', { name: 'Set the new password' }).click()
     await page.waitForURL('**/sign-in*')
     await page.getByLabel('E-mail').fill(ROOM_COACH.email)

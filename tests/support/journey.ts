@@ -17,7 +17,8 @@ export async function signIn(page: Page, person: Pick<DemoPerson, 'email' | 'rol
 
 /** Waits until nothing on the page is still loading or moving. */
 export async function settled(page: Page): Promise<void> {
-  await page.getByRole('heading', { level: 1 }).first().waitFor()
+  // Behind an open dialog the heading is there, but hidden from the roles.
+  await page.locator('h1').first().waitFor({ state: 'attached' })
   await page.waitForLoadState('networkidle')
   await page.waitForFunction(
     () =>
