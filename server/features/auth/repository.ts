@@ -5,6 +5,18 @@ import { PasswordReset, RefreshToken, SignIn } from './entity'
 export const findUserByEmail = (manager: EntityManager, email: string): Promise<User | null> =>
   manager.findOneBy(User, { email: email.toLowerCase() })
 
+/**
+ * Whether the password is still the one that was compared. Until the transaction ends it stays so: a reset that comes
+ * later waits, and then finds what this transaction wrote.
+ */
+export async function holdPassword(manager: EntityManager, userId: string, passwordHash: string): Promise<boolean> {
+  const rows: unknown[] = await manager.query('select 1 from users where id = $1 and password_hash = $2 for share', [
+    userId,
+    passwordHash,
+  ])
+  return rows.length > 0
+}
+
 export const insertSignIn = (
   manager: EntityManager,
   signIn: Pick<SignIn, 'userId' | 'createdAt' | 'endsAt'>,

@@ -51,10 +51,13 @@ export async function signIn(
   { email, password }: { email: string; password: string },
 ): Promise<SessionTokens & { userId: string }> {
   const { clock, dataSource } = dependencies
+  const refused = () => new AppError('wrong_credentials', 'Address and password do not match.')
   const user = await repository.findUserByEmail(dataSource.manager, email)
   const matches = await verifyPassword(user?.passwordHash ?? null, password)
-  if (user === null || !matches) throw new AppError('wrong_credentials', 'Address and password do not match.')
+  if (user === null || !matches) throw refused()
   return dataSource.transaction(async (manager) => {
+    // A reset that came in between has ended every session; this one must not outlive it.
+    if (!(await repository.holdPassword(manager, user.id, user.passwordHash))) throw refused()
     const now = clock.now()
     await repository.deleteEndedSignIns(manager, user.id, now)
     const endsAt = new Date(now.getTime() + SIGN_IN_DAYS * DAY)

@@ -1,6 +1,10 @@
-import { describe, expect, it } from 'vitest'
+import type { Response } from 'supertest'
+import { IsNull } from 'typeorm'
+import { describe, expect, it, vi } from 'vitest'
 import { AuditEntry } from '#server/features/audit/entity'
-import { PasswordReset } from '#server/features/auth/entity'
+import { PasswordReset, SignIn } from '#server/features/auth/entity'
+import { hashPassword } from '#server/features/auth/password-hash'
+import { revokeAllSignIns, setPasswordHash } from '#server/features/auth/repository'
 import { hashToken } from '#server/features/auth/token'
 import { User } from '#server/features/people/entity'
 import { expectError } from '#tests/support/expect-error'
@@ -106,5 +110,33 @@ describe('setting a new password', () => {
 
   it('refuses a made-up token', async () => {
     expectError(await reset('x'.repeat(43)), 'reset_link_invalid')
+  })
+})
+
+describe('a sign-in with the old password at the very moment of a reset', () => {
+  it('opens no session that outlives the reset', async () => {
+    const { dataSource, clock, make } = app()
+    const person = await make.athlete()
+    const newHash = await hashPassword(NEW_PASSWORD)
+    let crossing: Promise<Response> | undefined
+    await dataSource.transaction(async (manager) => {
+      // Holds the sign-in where it has compared the password and not yet written anything.
+      await manager.query('select 1 from users where id = $1 for update', [person.id])
+      crossing = signIn(person.email, TEST_PASSWORD).then((answer) => answer)
+      await vi.waitFor(
+        async () => {
+          const waiting: unknown[] = await dataSource.query(
+            `select 1 from pg_stat_activity where datname = current_database() and wait_event_type = 'Lock'`,
+          )
+          expect(waiting).toHaveLength(1)
+        },
+        { timeout: 5000, interval: 20 },
+      )
+      await setPasswordHash(manager, person.id, newHash)
+      await revokeAllSignIns(manager, person.id, clock.now(), 'passwordReset')
+    })
+    expectError(await crossing!, 'wrong_credentials')
+    expect(await dataSource.manager.countBy(SignIn, { userId: person.id, revokedAt: IsNull() })).toBe(0)
+    await signIn(person.email, NEW_PASSWORD).expect(200)
   })
 })
