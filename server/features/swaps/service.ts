@@ -101,14 +101,17 @@ async function insertSwap(
 }
 
 export async function take(
-  { dependencies, memory }: Context,
+  context: Context,
   actor: Actor,
   { params, query, body }: Received<typeof takeSwap>,
 ): Promise<SwapTaken> {
+  const { dependencies, memory } = context
   const { dataSource, clock } = dependencies
   // Made once before the transaction, which then finds it in memory: it holds its locks for less time, and never waits
   // for a second connection to read the catalogue with.
   const seen = await findInputsForSlot(dataSource.manager, actor, params.slotId, query.placeId)
+  // Even a refusal tells how the athlete is, so this read is in the trail however it ends.
+  await auditRead(context, actor, seen)
   await memory.json(seen, query, clock.now())
   return dataSource.transaction(async (manager) => {
     const owner = await findSlotOwner(manager, actor, params.slotId)

@@ -136,6 +136,20 @@ describe('POST /api/slots/:slotId/swaps', () => {
     expect(await swapsOf(slot)).toEqual([])
   })
 
+  it('leaves a line of what a coach learns from a refusal, and the athlete’s own leaves none', async () => {
+    const { athlete, slot, sent, agent } = await reader()
+    const coach = await app().make.coach(athlete.club)
+    await app().make.consent(athlete, coach)
+    await agent
+      .post(`/api/athletes/${athlete.id}/sore-joints`)
+      .send(soreReport({ rating: 9 }))
+      .expect(201)
+    expectError(await agent.post(forSlot(slot)).send(sent), 'red_flag')
+    expectError(await (await app().as(coach)).post(forSlot(slot)).send(sent), 'red_flag')
+    const trail = await app().dataSource.manager.findBy(AuditEntry, { subjectId: athlete.id, action: 'read.ranking' })
+    expect(trail.map(({ actorId }) => actorId)).toEqual([coach.id])
+  })
+
   it('happens once when many ask at once', async () => {
     const { slot, sent, agent } = await reader()
     const answers = await Promise.all(Array.from({ length: 6 }, () => agent.post(forSlot(slot)).send(sent)))
