@@ -45,8 +45,21 @@ export async function markUsed(manager: EntityManager, id: string, at: Date): Pr
 
 type RevokedWhy = 'signedOut' | 'tokenReused' | 'passwordReset'
 
-export async function revokeSignIn(manager: EntityManager, id: string, at: Date, why: RevokedWhy): Promise<void> {
-  await manager.update(SignIn, { id, revokedAt: IsNull() }, { revokedAt: at, revokedWhy: why })
+/** Ends the sign-in unless it was ended before. Resolves to whose it was, or null when nothing changed. */
+export async function revokeSignIn(
+  manager: EntityManager,
+  id: string,
+  at: Date,
+  why: RevokedWhy,
+): Promise<string | null> {
+  const result = await manager
+    .createQueryBuilder()
+    .update(SignIn)
+    .set({ revokedAt: at, revokedWhy: why })
+    .where('id = :id and revoked_at is null', { id })
+    .returning('user_id')
+    .execute()
+  return (result.raw as Array<{ user_id: string }>)[0]?.user_id ?? null
 }
 
 export async function revokeAllSignIns(

@@ -100,7 +100,8 @@ export async function signOut(
     const claims = access === null ? null : verifyAccessToken(env, clock, access)
     const row = refresh === null ? null : await repository.lockRefreshToken(manager, hashToken(refresh))
     for (const id of new Set([claims?.signInId, row?.signInId])) {
-      if (id !== undefined) await repository.revokeSignIn(manager, id, clock.now(), 'signedOut')
+      const userId = id === undefined ? null : await repository.revokeSignIn(manager, id, clock.now(), 'signedOut')
+      if (userId !== null) await recordAudit(manager, { actor: { userId }, action: 'close.session', subject: userId })
     }
   })
 }

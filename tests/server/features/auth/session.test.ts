@@ -205,6 +205,15 @@ describe('signing out', () => {
     expectError(await refreshWith(second.refresh), 'session_expired')
   })
 
+  it('leaves one line in the trail, however often it is asked for', async () => {
+    const { person, access, refresh } = await signedIn()
+    for (const cookie of [`pintle_access=${access}; pintle_refresh=${refresh}`, `pintle_refresh=${refresh}`]) {
+      await app().anonymous().post('/api/auth/sign-out').set('Cookie', cookie).expect(204)
+    }
+    const trail = await app().dataSource.manager.findBy(AuditEntry, { subjectId: person.id, action: 'close.session' })
+    expect(trail.map(({ actorId, details }) => ({ actorId, details }))).toEqual([{ actorId: person.id, details: {} }])
+  })
+
   it('succeeds when nobody is signed in', async () => {
     await app().anonymous().post('/api/auth/sign-out').expect(204)
   })
