@@ -45,6 +45,8 @@ export async function resetPassword(
     if (userId === null) {
       throw new AppError('reset_link_invalid', 'This link was used already or is too old. Ask for a new one.')
     }
+    // Two requests at once leave two links; none may undo what is set now.
+    await repository.deleteUnusedResets(manager, userId)
     await repository.setPasswordHash(manager, userId, await hashPassword(password))
     await repository.revokeAllSignIns(manager, userId, now, 'passwordReset')
     await recordAudit(manager, { actor: { userId }, action: 'reset.password', subject: userId })

@@ -86,8 +86,12 @@ export async function replacePasswordReset(
   manager: EntityManager,
   reset: Pick<PasswordReset, 'userId' | 'tokenHash' | 'createdAt' | 'expiresAt'>,
 ): Promise<void> {
-  await manager.delete(PasswordReset, { userId: reset.userId, usedAt: IsNull() })
+  await deleteUnusedResets(manager, reset.userId)
   await manager.insert(PasswordReset, reset)
+}
+
+export async function deleteUnusedResets(manager: EntityManager, userId: string): Promise<void> {
+  await manager.delete(PasswordReset, { userId, usedAt: IsNull() })
 }
 
 /** Uses the reset up and returns whose it is, or null when it is unknown, used or over. One statement, so it works once. */

@@ -93,6 +93,19 @@ describe('setting a new password', () => {
     expectError(await reset(token), 'reset_link_invalid')
   })
 
+  it('ends every other link, also one that was asked for at the same moment', async () => {
+    const person = await app().make.athlete()
+    const token = await tokenFor(person.email)
+    const twin = 'twin'.repeat(10)
+    const createdAt = app().clock.now()
+    const expiresAt = new Date(createdAt.getTime() + 60_000)
+    const { manager } = app().dataSource
+    await manager.insert(PasswordReset, { userId: person.id, tokenHash: hashToken(twin), createdAt, expiresAt })
+    await reset(token).expect(204)
+    expectError(await reset(twin, 'somebody else’s password'), 'reset_link_invalid')
+    await signIn(person.email, NEW_PASSWORD).expect(200)
+  })
+
   it('works for thirty minutes', async () => {
     const person = await app().make.athlete()
     const token = await tokenFor(person.email)
