@@ -3,11 +3,21 @@ import type { RankContext } from './context'
 import { intensity } from './dose'
 import { GRAVITY } from './efforts'
 import { groupRoleIn, rolesIn } from './muscles'
-import { MUSCLES } from './muscle-names'
 import { KEYS, NOBODY } from './keys'
-import { CODE, EXTRA, HEAD, LOAD_KINDS, ROW, slopeOf, SPINE, type PackedCatalogue } from './pack'
+import {
+  CODE,
+  EXTRA,
+  HEAD,
+  keysSize,
+  LOAD_KINDS,
+  ROW,
+  slopeOf,
+  SPINE,
+  type PackedBlocks,
+  type PackedCatalogue,
+} from './pack'
 import { gainsOf } from './reach'
-import { calmOf, keptOf, leanOf, likeness, spareOf } from './score'
+import { calmOf, keptOf, leanOf, spareOf } from './score'
 import { roundLoad, type Settings } from './settings'
 import type { StressChannel } from './types'
 
@@ -20,7 +30,8 @@ export interface BoundTables {
   serves: Uint8Array
   /** Largest stress allowed, by joint and extra channel. */
   extraCap: Float64Array
-  capsExtras: boolean
+  /** Indices of the joints that have caps. */
+  cappedJoints: number[]
   /** Cap on L5/S1 compression as a share of what counts as 1, that share per N, and stature ÷ arm of the back muscles. */
   spineCap: number
   spineGain: number
@@ -29,11 +40,15 @@ export interface BoundTables {
   reach: Float64Array
   /** Cap ÷ gain, Infinity where nothing caps it. */
   capReach: Float64Array
-  /** Roles of every muscle, key by key. */
-  muscleRoles: Float64Array
-  /** Working space: demands by key, loads by muscle, and the share used of the tightest cap. */
+  /** Gain × role in the target, and gain ÷ cap. */
+  served: Float64Array
+  capGain: Float64Array
+  /** Product of every key's muscle roles with what the original asks of the muscles, its length 1, and with every other key's. */
+  alike: Float64Array
+  products: Float64Array
+  /** Working space: demands by key, the keys at work, and the share used of the tightest cap. */
   keyMost: Float64Array
-  loads: Float64Array
+  working: Uint8Array
   use: number
 }
 
@@ -48,6 +63,9 @@ function limitOf({ caps }: RankContext, joint: Joint, channel: StressChannel): n
   for (const { byChannel } of caps.get(joint) ?? []) limit = Math.min(limit, byChannel.get(channel)?.limit ?? limit)
   return limit
 }
+
+const product = (one: readonly number[], other: readonly number[]): number =>
+  one.reduce((sum, value, i) => sum + value * (other[i] ?? 0), 0)
 
 /** Makes the tables of one ranking. */
 export function boundTables(context: RankContext): BoundTables {
@@ -66,6 +84,10 @@ export function boundTables(context: RankContext): BoundTables {
     if (action === null) return Number.POSITIVE_INFINITY
     return action === 'grip' ? gripCap : limitOf(context, ACTION_JOINT[action], action)
   })
+  const muscles = KEYS.slice(0, NOBODY).map(({ action, grip }) =>
+    action === null ? [] : rolesIn(action, grip ?? 'none', ruleSet),
+  )
+  const length = Math.sqrt(product(context.originalLoads, context.originalLoads))
   const extraCap = Float64Array.from(
     JOINTS.flatMap((joint) => [limitOf(context, joint, 'leaning'), limitOf(context, joint, 'endRange')]),
   )
@@ -74,18 +96,17 @@ export function boundTables(context: RankContext): BoundTables {
     mass: athlete.bodyMass,
     gain,
     reach: gain.map((own) => context.original.intensity / own),
-    muscleRoles: Float64Array.from(
-      KEYS.flatMap(({ action, grip }) =>
-        action === null ? MUSCLES.map(() => 0) : rolesIn(action, grip ?? 'none', ruleSet),
-      ),
-    ),
+    served: gain.map((own, key) => own * role[key]!),
+    capGain: gain.map((own, key) => own / cap[key]!),
+    alike: Float64Array.from(muscles, (roles) => (length === 0 ? 0 : product(roles, context.originalLoads) / length)),
+    products: Float64Array.from(muscles.flatMap((one) => muscles.map((other) => product(one, other)))),
+    working: new Uint8Array(NOBODY),
     capReach: cap.map((limit, key) => limit / gain[key]!),
-    loads: new Float64Array(MUSCLES.length),
     use: 0,
     role,
     serves: Uint8Array.from(role, (share) => (share >= ruleSet.score.servesFrom.value ? 1 : 0)),
     extraCap,
-    capsExtras: extraCap.some((limit) => limit !== Number.POSITIVE_INFINITY),
+    cappedJoints: JOINTS.flatMap((joint, index) => (context.caps.has(joint) ? [index] : [])),
     spineCap: limitOf(context, 'lowerBack', 'leaning'),
     spineGain: GRAVITY / ruleSet.stress.compressionFull.value,
     spineArm: athlete.stature / ruleSet.stress.backMuscleArm.value,
@@ -97,7 +118,10 @@ export function boundTables(context: RankContext): BoundTables {
  * How far the athlete's strengths can lift a target drive above what `reach` says for the average adult's: the largest ratio
  * between a key that serves the target and any other.
  */
-export function spreadOf({ gain, role, mass }: BoundTables, { averageGain }: PackedCatalogue): number {
+export function spreadOf(
+  { gain, role, mass }: BoundTables,
+  { averageGain }: Pick<PackedCatalogue, 'averageGain'>,
+): number {
   let most = 0
   let least = Number.POSITIVE_INFINITY
   for (let key = 0; key < NOBODY; key++) {
@@ -116,15 +140,17 @@ interface Ends {
   allowedMost: number
 }
 
-function endsOf({ numbers, words }: PackedCatalogue, block: number, tables: BoundTables, ends: Ends): void {
+function endsOf({ numbers, singles, bytes }: PackedBlocks, block: number, tables: BoundTables, ends: Ends): void {
   const { reach, capReach, mass } = tables
   let strongLeast = Number.NEGATIVE_INFINITY
   let strongMost = Number.POSITIVE_INFINITY
   let allowedLeast = Number.NEGATIVE_INFINITY
   let allowedMost = Number.POSITIVE_INFINITY
-  const end = block + HEAD.size + ROW * numbers[block]!
-  for (let r = block + HEAD.size; r < end; r += ROW) {
-    const key = words[2 * r + 7]!
+  const count = numbers[block]!
+  const keys = 8 * (block + HEAD.size)
+  let r = block + HEAD.size + keysSize(count)
+  for (let i = 0; i < count; i++, r += ROW) {
+    const key = bytes[keys + i]!
     const inverse = numbers[r]!
     const moved = mass * numbers[r + 1]!
     const edge = reach[key]! * inverse - moved
@@ -133,21 +159,21 @@ function endsOf({ numbers, words }: PackedCatalogue, block: number, tables: Boun
     } else if (edge > strongLeast) strongLeast = edge
     const capped = capReach[key]!
     if (capped !== Number.POSITIVE_INFINITY) {
-      const limit = (capped / numbers[r + 2]!) * inverse - moved
+      const limit = (capped / singles[2 * r + 4]!) * inverse - moved
       if (inverse > 0) {
         if (limit < allowedMost) allowedMost = limit
       } else if (limit > allowedLeast) allowedLeast = limit
     }
   }
+  const end = r
   ends.strongLeast = strongLeast
   ends.strongMost = strongMost
   ends.allowedLeast = allowedLeast
   ends.allowedMost = allowedMost
-  if (tables.capsExtras) {
-    const last = end + EXTRA * numbers[block + HEAD.extras]!
-    for (let e = end; e < last; e += EXTRA) {
+  for (const joint of tables.cappedJoints) {
+    const last = end + EXTRA * extrasUpTo(bytes, block, joint)
+    for (let e = end + EXTRA * extrasUpTo(bytes, block, joint - 1); e < last; e += EXTRA) {
       const limit = tables.extraCap[Math.floor(numbers[e]! / CODE)]!
-      if (limit === Number.POSITIVE_INFINITY) continue
       cutEnds(ends, numbers[e + 1]! * tables.gain[numbers[e]! % CODE]!, mass * numbers[e + 2]!, limit)
     }
   }
@@ -173,6 +199,10 @@ function cutSpine(
   cutEnds(ends, spineGain * slope, (mass * a) / slope, spineCap)
 }
 
+/** Extras of the joints up to one, in a block. */
+const extrasUpTo = (bytes: Uint8Array, block: number, joint: number): number =>
+  joint < 0 ? 0 : bytes[8 * (block + HEAD.ends) + joint]!
+
 function cutEnds(ends: Ends, slope: number, moved: number, limit: number): void {
   const edge = limit / slope - moved
   if (slope > 0) {
@@ -197,54 +227,56 @@ function readSettings(numbers: Float64Array, block: number): Settings {
 
 /** The working load, or null where rounding could tip it to another setting. */
 function loadOf({ strongLeast, strongMost, allowedLeast, allowedMost }: Ends, settings: Settings): number | null {
-  const { kind, lightest, heaviest } = settings
+  const { kind, lightest, heaviest, steps } = settings
   if (kind === 'none') return 0
   if (close(strongLeast, strongMost) || close(allowedLeast, allowedMost)) return null
-  // Rows never at work are left away, and with them ends of assistance beyond none; they could matter only here.
-  if (kind === 'assistance' && Math.max(strongLeast, allowedLeast) > -SLACK) return null
   const strong = strongLeast <= strongMost ? strongMost : Number.NEGATIVE_INFINITY
   const allowed = allowedLeast <= allowedMost ? allowedMost : Number.NEGATIVE_INFINITY
   const most = Math.min(strong, allowed)
   if (close(most, lightest) || close(most, heaviest)) return null
   if (most < lightest) return lightest
   if (most > heaviest) return roundLoad(settings, heaviest) ?? lightest
-  const slack = SLACK * (1 + Math.abs(most))
-  const load = roundLoad(settings, most - slack) ?? lightest
-  return load === (roundLoad(settings, most + slack) ?? lightest) ? load : null
+  // Between two settings, and not so near one that rounding could decide.
+  const at = steps === null ? 0.5 : (Math.abs(most) - steps.first) / steps.step
+  if (Math.abs(at - Math.round(at)) < SLACK * (1 + Math.abs(at))) return null
+  return roundLoad(settings, most) ?? lightest
 }
 
 const close = (one: number, other: number): boolean => Math.abs(one - other) < SLACK * (1 + Math.abs(other))
 
-/** The most of the planned intensity that a set can keep with whole or part repetitions; null when not one is possible. */
+/** The most of the planned intensity that a set can keep; null when not one repetition is possible. As `setAt`, rounded up. */
 function keptAtMost(demand: number, { original, request, ruleSet }: RankContext): number | null {
   const { epley, mostRepetitions, leastIntensity } = ruleSet.dose
   const { rir } = request.planned
-  const possible = epley.value * (1 / demand - 1) - rir
-  if (possible < 1 - SLACK) return null
-  if (possible < original.repetitions) return 1
+  const possible = Math.floor(epley.value * (1 / demand - 1) - rir + SLACK)
+  if (possible < 1) return null
+  if (possible < original.repetitions) return Math.min(1, demand / intensity(possible, rir, ruleSet))
   const raises = request.intent === 'size' || request.intent === 'endurance'
   const most =
     raises && demand >= leastIntensity.value - SLACK
       ? Math.max(original.repetitions, mostRepetitions.value)
       : original.repetitions
-  return Math.min(1, demand / intensity(Math.min(possible, most), rir, ruleSet))
+  return Math.min(1, demand / intensity(Math.max(original.repetitions, Math.min(possible, most)), rir, ruleSet))
 }
 
 const ENDS: Ends = { strongLeast: 0, strongMost: 0, allowedLeast: 0, allowedMost: 0 }
 
 /** The target's drive at a load: the rows that serve it alone. */
 function driveAt(
-  { numbers, singles, words }: PackedCatalogue,
+  { numbers, singles, bytes }: PackedBlocks,
   block: number,
   load: number,
-  { gain, role, mass }: BoundTables,
+  { served, mass }: BoundTables,
 ): number {
   let drive = 0
-  const end = block + HEAD.size + ROW * numbers[block]!
-  for (let r = block + HEAD.size; r < end; r += ROW) {
-    const key = words[2 * r + 7]!
-    if (role[key] === 0) continue
-    const value = ((load + mass * numbers[r + 1]!) / numbers[r]!) * gain[key]! * singles[2 * r + 6]! * role[key]!
+  const count = numbers[block]!
+  const keys = 8 * (block + HEAD.size)
+  const rows = block + HEAD.size + keysSize(count)
+  for (let i = 0; i < count; i++) {
+    const share = served[bytes[keys + i]!]!
+    if (share === 0) continue
+    const r = rows + ROW * i
+    const value = ((load + mass * numbers[r + 1]!) / numbers[r]!) * share * singles[2 * r + 5]!
     if (value > drive) drive = value
   }
   return drive
@@ -255,37 +287,38 @@ function driveAt(
  * largest share of a cap used in `tables.use`.
  */
 function demandAt(
-  { numbers, words }: PackedCatalogue,
+  { numbers, singles, bytes }: PackedBlocks,
   block: number,
   load: number,
   tables: BoundTables,
   enough: number,
 ): number {
-  const { gain, capReach, mass, keyMost } = tables
+  const { gain, capGain, mass, keyMost } = tables
   keyMost.fill(0)
   let demand = 0
   let use = 0
-  const end = block + HEAD.size + ROW * numbers[block]!
-  for (let r = block + HEAD.size; r < end; r += ROW) {
+  const count = numbers[block]!
+  const keys = 8 * (block + HEAD.size)
+  let r = block + HEAD.size + keysSize(count)
+  for (let i = 0; i < count; i++, r += ROW) {
     const pull = (load + mass * numbers[r + 1]!) / numbers[r]!
     if (pull <= 0) continue
-    const key = words[2 * r + 7]!
+    const key = bytes[keys + i]!
     const value = pull * gain[key]!
     if (value > keyMost[key]!) keyMost[key] = value
     if (value > demand) {
       demand = value
       if (demand > enough) return demand
     }
-    const used = (pull * numbers[r + 2]!) / capReach[key]!
+    const used = pull * singles[2 * r + 4]! * capGain[key]!
     if (used > use) use = used
   }
-  if (tables.capsExtras) {
-    const last = end + EXTRA * numbers[block + HEAD.extras]!
-    for (let e = end; e < last; e += EXTRA) {
-      const limit = tables.extraCap[Math.floor(numbers[e]! / CODE)]!
-      if (limit === Number.POSITIVE_INFINITY) continue
+  const end = r
+  for (const joint of tables.cappedJoints) {
+    const last = end + EXTRA * extrasUpTo(bytes, block, joint)
+    for (let e = end + EXTRA * extrasUpTo(bytes, block, joint - 1); e < last; e += EXTRA) {
       const size = numbers[e + 1]! * gain[numbers[e]! % CODE]!
-      const used = (size * (load + mass * numbers[e + 2]!)) / limit
+      const used = (size * (load + mass * numbers[e + 2]!)) / tables.extraCap[Math.floor(numbers[e]! / CODE)]!
       if (used > use) use = used
     }
   }
@@ -307,7 +340,7 @@ function demandAt(
  * `whole` is returned where rounding could decide otherwise. Leaves every key's largest demand in `tables.keyMost`.
  */
 export function scoreBound(
-  packed: PackedCatalogue,
+  packed: PackedBlocks,
   at: number,
   tables: BoundTables,
   whole: number,
@@ -339,15 +372,21 @@ export function scoreBound(
   return 100 * kept * spare * calm * leanOf(rest, ruleSet) * RAISED
 }
 
-/** Carry-over of what `scoreBound` left in the tables. */
-export function carryOverBound({ keyMost, muscleRoles, loads, context }: BoundTables): number {
-  const { ruleSet, originalLoads } = context
-  loads.fill(0)
-  const muscles = loads.length
-  for (let key = 0; key < NOBODY; key++) {
+/** Carry-over of what `scoreBound` left in the tables: the cosine by way of the keys' own products. */
+export function carryOverBound({ keyMost, working, alike, products, context }: BoundTables): number {
+  let count = 0
+  for (let key = 0; key < NOBODY; key++) if (keyMost[key]! > 0) working[count++] = key
+  let dot = 0
+  let square = 0
+  for (let i = 0; i < count; i++) {
+    const key = working[i]!
     const demand = keyMost[key]!
-    if (demand === 0) continue
-    for (let i = 0; i < muscles; i++) loads[i]! += muscleRoles[key * muscles + i]! * demand
+    const row = key * NOBODY
+    dot += demand * alike[key]!
+    let crossed = 0.5 * demand * products[row + key]!
+    for (let j = 0; j < i; j++) crossed += keyMost[working[j]!]! * products[row + working[j]!]!
+    square += 2 * demand * crossed
   }
-  return 1 - ruleSet.score.carryOver.value * (1 - likeness(loads, originalLoads))
+  const cosine = square > 0 ? Math.min(1, dot / Math.sqrt(square)) : 0
+  return (1 - context.ruleSet.score.carryOver.value * (1 - cosine)) * RAISED
 }

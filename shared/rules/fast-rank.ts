@@ -4,7 +4,7 @@ import { boundTables, carryOverBound, scoreBound, spreadOf } from './bound'
 import { contextOf, type RankContext } from './context'
 import { MaxHeap } from './max-heap'
 import { TARGET_GROUP_NAMES } from './muscle-names'
-import type { PackedCatalogue } from './pack'
+import { targetPack, type PackedCatalogue, type TargetPack } from './pack'
 import { bestFirst, considersOriginal, rank, repeatsOriginal, resultOf, stopped, type Unranked } from './rank'
 import { rate } from './rate'
 import { calmOf } from './score'
@@ -12,6 +12,8 @@ import type { Candidate, RankRequest, RankResult } from './types'
 
 /** Bins for sorting by the first bound, over scores 0–100. */
 const BINS = 1024
+/** How many exercises the second bound looks at before anything is rated. */
+const FIRST_BATCH = 512
 
 /** A ranking of which only the best rows are wanted, out of a packed catalogue. */
 export interface TopRequest {
@@ -52,46 +54,44 @@ function bestRows(
   count: number,
 ): Unranked[] {
   const tables = boundTables(context)
-  const { order, edges } = sortByFirstBound(context, packed, spreadOf(tables, packed))
+  const blocks = targetPack(packed)(context.ruleSet)(TARGET_GROUP_NAMES.indexOf(context.request.target))
+  const original = considersOriginal(context) ? undefined : packed.positions.get(context.request.original.id)
+  const { binOf, sizes } = binByFirstBound(context, blocks, spreadOf(tables, packed), original)
   const rows: Unranked[] = []
   // Scores enter negated: the heap's top is then the worst of the best `count`.
   const scores = new MaxHeap()
   const worstWanted = () => (scores.size < count ? Number.NEGATIVE_INFINITY : -scores.topKey)
   const rateExactly = (at: number) => {
-    const rated = rate(candidateAt(packed.index[at]!), context)
+    const rated = rate(candidateAt(blocks.index[at]!), context)
     if (!('row' in rated) || repeatsOriginal(rated.row, context)) return
     rows.push(rated.row)
     scores.push(-rated.row.score, at)
     if (scores.size > count) scores.pop()
   }
-  // Waiting under the second bound, and narrowed by carry-over under the third.
   const waiting = new MaxHeap()
-  const narrowed = new MaxHeap()
   const settleDownTo = (edge: number) => {
-    for (;;) {
-      const least = Math.max(edge, worstWanted())
-      if (narrowed.size > 0 && narrowed.topKey >= waiting.topKey && narrowed.topKey >= least) {
-        rateExactly(narrowed.pop())
-      } else if (waiting.size > 0 && waiting.topKey >= least) {
-        const bound = waiting.topKey
-        const at = waiting.pop()
-        const again = scoreBound(packed, at, tables, Number.POSITIVE_INFINITY, Number.NEGATIVE_INFINITY)
-        // Where rounding could tip the load the bound stands, and there are no demands to compare.
-        narrowed.push(again === Number.POSITIVE_INFINITY ? bound : again * carryOverBound(tables), at)
-      } else return
-    }
+    while (waiting.size > 0 && waiting.topKey >= edge && waiting.topKey >= worstWanted()) rateExactly(waiting.pop())
   }
-  for (let bin = 0; bin + 1 < edges.length; bin++) {
-    const most = upperEdge(bin)
-    // Nothing from here on can beat what stands above this bin.
+  // Batches of growing size from the best bins down; within one in the order of memory.
+  let batch = FIRST_BATCH
+  for (let from = 0; from < BINS; batch *= 2) {
+    const most = upperEdge(from)
+    // Nothing from here on can beat what waits above.
     settleDownTo(most)
     const worst = worstWanted()
     if (most < worst) break
-    for (let i = edges[bin]!; i < edges[bin + 1]!; i++) {
-      const at = order[i]!
-      const bound = scoreBound(packed, at, tables, most, worst)
-      if (bound >= worst && bound >= 0) waiting.push(bound, at)
+    let to = from
+    for (let size = 0; to < BINS && size < batch; to++) size += sizes[to]!
+    for (let at = 0; at < binOf.length; at++) {
+      const bin = binOf[at]!
+      if (bin < from || bin >= to) continue
+      const bound = scoreBound(blocks, at, tables, Number.POSITIVE_INFINITY, worst)
+      if (bound < 0 || bound < worst) continue
+      // Where rounding could tip the load the bin's edge stands, and there are no demands to compare.
+      const narrowed = bound === Number.POSITIVE_INFINITY ? upperEdge(bin) : bound * carryOverBound(tables)
+      if (narrowed >= worst) waiting.push(narrowed, at)
     }
+    from = to
   }
   settleDownTo(Number.NEGATIVE_INFINITY)
   return rows.sort(bestFirst)
@@ -100,44 +100,28 @@ function bestRows(
 /** Largest first bound in a bin; bins run from the best down. */
 const upperEdge = (bin: number): number => (100 * (BINS - bin)) / BINS + 1e-3
 
-/** Indices in descending bins of the first bound, what cannot be offered left away; a counting sort. */
-export function sortByFirstBound(
-  context: RankContext,
-  packed: PackedCatalogue,
+/** The bin of every exercise by its first bound, −1 for what cannot be offered, and how many each bin holds. */
+function binByFirstBound(
+  { request, ruleSet, originalDrive }: RankContext,
+  { count, index, coordination, skill, potential, reach }: TargetPack,
   spread: number,
-): { order: Uint32Array; edges: Uint32Array } {
-  const { request, ruleSet, originalDrive } = context
-  const group = TARGET_GROUP_NAMES.indexOf(request.target)
-  const potentials = packed.potential[group]!
-  const reaches = packed.reach[group]!
-  const { leastTargetDrive } = ruleSet.score
+  original: number | undefined,
+): { binOf: Int16Array; sizes: Uint32Array } {
   const highest = SKILL_GRADES.indexOf(request.athlete.skill)
-  const standard = Math.max(originalDrive, leastTargetDrive.value)
-  const { coordination, skill } = packed
+  const least = ruleSet.score.leastTargetDrive.value - 1e-9
+  const standard = Math.max(originalDrive, ruleSet.score.leastTargetDrive.value)
+  // calmOf is a straight line.
   const calmest = calmOf(0, request.intent, ruleSet)
   const slope = (calmOf(100, request.intent, ruleSet) - calmest) / 100
-  const least = leastTargetDrive.value - 1e-9
-  const skipped = considersOriginal(context) ? -1 : (packed.positions.get(request.original.id) ?? -1)
-  const binOf = new Int16Array(packed.count)
-  const edges = new Uint32Array(BINS + 1)
-  for (let index = 0; index < packed.count; index++) {
-    const potential = Math.min(potentials[index]!, reaches[index]! * spread)
-    if (skill[index]! > highest || potential < least || index === skipped) {
-      binOf[index] = -1
-      continue
-    }
-    // calmOf is a straight line.
-    const first = (calmest + slope * coordination[index]!) * Math.min(1, potential / standard)
+  const binOf = new Int16Array(count).fill(-1)
+  const sizes = new Uint32Array(BINS)
+  for (let at = 0; at < count; at++) {
+    const drive = Math.min(potential[at]!, reach[at]! * spread)
+    if (drive < least || skill[at]! > highest || index[at] === original) continue
+    const first = (calmest + slope * coordination[at]!) * Math.min(1, drive / standard)
     const bin = Math.min(BINS - 1, Math.max(0, Math.floor((1 - first) * BINS)))
-    binOf[index] = bin
-    edges[bin + 1]!++
+    binOf[at] = bin
+    sizes[bin]!++
   }
-  for (let bin = 0; bin < BINS; bin++) edges[bin + 1]! += edges[bin]!
-  const next = edges.slice()
-  const order = new Uint32Array(edges[BINS]!)
-  for (let index = 0; index < packed.count; index++) {
-    const bin = binOf[index]!
-    if (bin >= 0) order[next[bin]!++] = index
-  }
-  return { order, edges }
+  return { binOf, sizes }
 }

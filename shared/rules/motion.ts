@@ -63,10 +63,13 @@ export const motionOf = memo((solution: ExerciseSolution): Motion => {
   return { working, idle: of('idle'), middle: working }
 })
 
-/** How much of a demand counts as stress: least when the joint is held still, in full from a set excursion on. */
+/**
+ * How much of a demand counts as stress: least when the joint is held still, in full from a set excursion on.
+ * In single precision, so that a packed catalogue can hold the very same number.
+ */
 export function stressFactor(degrees: number, ruleSet: RuleSet): number {
   const { still, fullAt } = ruleSet.stress.motion.value
-  return still + (1 - still) * clamp(degrees / fullAt, 0, 1)
+  return Math.fround(still + (1 - still) * clamp(degrees / fullAt, 0, 1))
 }
 
 /** How much of its isometric strength a joint has left for moving this far. */
@@ -75,8 +78,8 @@ export function movingStrength(degrees: number, ruleSet: RuleSet): number {
   return 1 - (1 - share) * clamp(degrees / fullAt, 0, 1)
 }
 
-/** How much of a limb joint's demand counts as training its muscles, from how far it moves. */
+/** How much of a limb joint's demand counts as training its muscles, from how far it moves; in single precision as well. */
 export function heldShare(degrees: number, ruleSet: RuleSet): number {
   const { share, fullAt } = ruleSet.muscles.held.value
-  return share + (1 - share) * clamp(degrees / fullAt, 0, 1)
+  return Math.fround(share + (1 - share) * clamp(degrees / fullAt, 0, 1))
 }
