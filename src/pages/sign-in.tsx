@@ -4,8 +4,9 @@ import { PageHeader } from '@/components/ui/page-header'
 import { DemoAccounts } from '@/features/auth/components/demo-accounts'
 import { SignInForm } from '@/features/auth/components/sign-in-form'
 
-/** Only a path of this site; `//elsewhere` would leave it. */
-const safe = (next: string | null): string => (next !== null && /^\/(?![/\\])/.test(next) ? next : paths.home())
+/** Only a path of this site; `//elsewhere` would leave it, also with the control characters that browsers drop. */
+const safe = (next: string | null): string =>
+  next !== null && /^\/(?![/\\])[\x21-\x7e]*$/.test(next) ? next : paths.home()
 
 export function Component() {
   const [search] = useSearchParams()

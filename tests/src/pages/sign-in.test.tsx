@@ -37,6 +37,7 @@ describe('signing in', () => {
     ['/sign-in?next=%2F%2Felsewhere.example', '/'],
     ['/sign-in?next=https%3A%2F%2Felsewhere.example', '/'],
     ['/sign-in?next=%2F%5Celsewhere.example', '/'],
+    ['/sign-in?next=%2F%09%2Felsewhere.example', '/'],
   ])('from %s leads to %s, never off the site', async (path, target) => {
     const { user, router } = open({ [POST]: aPerson() }, path)
     await fillIn(user)
