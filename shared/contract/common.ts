@@ -12,12 +12,14 @@ const inOurTime = (text: string) => text >= '1900' && text < '2200'
 /** Calendar day in the athlete's own time zone, YYYY-MM-DD. */
 export const day = z.iso.date().refine(inOurTime, 'Give a day between 1900 and 2199.')
 export const instant = z.iso.datetime().refine(inOurTime, 'Give a time between 1900 and 2199.')
-export const email = z.email().max(LIMITS.email.max)
+export const email = z
+  .email('Enter an e-mail address, such as name@example.org.')
+  .max(LIMITS.email.max, `Use at most ${LIMITS.email.max} characters.`)
 export const password = z
   .string()
   .min(LIMITS.password.min, `Use at least ${LIMITS.password.min} characters.`)
   .max(LIMITS.password.max)
-export const note = z.string().trim().max(LIMITS.note.max)
+export const note = z.string().trim().max(LIMITS.note.max, `Keep it to ${LIMITS.note.max} characters.`)
 export const side = z.enum(['left', 'right'])
 
 /** The one error shape of the API. `fields` names each offending input by its dotted path. */

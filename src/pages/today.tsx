@@ -17,7 +17,7 @@ import { standingQuery } from '@/features/sore-joints/api'
 import { SoreJointDialog } from '@/features/sore-joints/components/sore-joint-dialog'
 import { SoreSummary } from '@/features/sore-joints/components/sore-summary'
 import { useUndoTaken } from '@/features/swaps/api'
-import { messageOf } from '@/lib/api-error'
+import { isApiError, messageOf } from '@/lib/api-error'
 import { formatDay } from '@/lib/format'
 import { usePerson } from '@/lib/person'
 import { useToday } from '@/lib/use-today'
@@ -82,7 +82,11 @@ function OwnSession({ session }: { session: Session }) {
         undo.mutate(swapId, {
           onSuccess: ({ exercise }) =>
             toast({ text: `${exercise.name} is taken out again; the planned exercise is back.` }),
-          onError: (error) => toast({ text: messageOf(error, 'The swap could not be undone. Try again.') }),
+          // A second tap, or another tab, found it undone already: that is what was wanted.
+          onError: (error) => {
+            if (isApiError(error, 'conflict')) return
+            toast({ text: messageOf(error, 'The swap could not be undone. Try again.') })
+          },
         })
       }
     />

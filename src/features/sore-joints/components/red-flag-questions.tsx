@@ -2,6 +2,7 @@ import { Controller, type Control } from 'react-hook-form'
 import { RED_FLAGS, type RedFlag } from '#shared/contract/sore-joint'
 import { Chip, ChoiceGroup } from '@/components/ui/choice-group'
 import type { SoreJointForm } from '../hooks/use-sore-joint-form'
+import { StopAdvice } from './stop-advice'
 
 const QUESTIONS: Record<RedFlag, string> = {
   injury: 'Did it start with an injury in the last days, with a pop or a changed shape?',
@@ -22,7 +23,10 @@ export function RedFlagQuestions({ control }: { control: Control<SoreJointForm> 
             control={control}
             name={`redFlags.${flag}`}
             render={({ field, fieldState }) => (
-              <ChoiceGroup legend={QUESTIONS[flag]} error={fieldState.error && 'Answer yes or no.'}>
+              <ChoiceGroup
+                legend={QUESTIONS[flag]}
+                error={fieldState.error && field.value === undefined ? 'Answer yes or no.' : undefined}
+              >
                 {([true, false] as const).map((answer) => (
                   <Chip
                     key={String(answer)}
@@ -36,6 +40,7 @@ export function RedFlagQuestions({ control }: { control: Control<SoreJointForm> 
                     className="min-w-20 justify-center"
                   />
                 ))}
+                {field.value === true && <StopAdvice flags={[flag]} />}
               </ChoiceGroup>
             )}
           />

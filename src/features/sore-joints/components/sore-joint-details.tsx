@@ -36,12 +36,12 @@ export function SoreJointDetails({ form, raised, failure }: SoreJointDetailsProp
       <JointChooser
         chosen={joint === undefined || side === undefined ? null : { joint, side }}
         onChoose={choose}
-        error={errors.joint || errors.side ? 'Choose a joint.' : undefined}
+        error={(errors.joint || errors.side) && joint === undefined ? 'Choose a joint.' : undefined}
       />
       <RatingScale
         value={rating}
         onChange={(value) => form.setValue('rating', value, mark)}
-        error={errors.rating && 'Choose a number from 0 to 10.'}
+        error={errors.rating && rating === undefined ? 'Choose a number from 0 to 10.' : undefined}
       />
       <Controller
         control={form.control}
@@ -51,7 +51,7 @@ export function SoreJointDetails({ form, raised, failure }: SoreJointDetailsProp
             joint={joint}
             value={field.value}
             onChange={field.onChange}
-            error={errors.provocations?.message}
+            error={field.value.length === 0 ? errors.provocations?.message : undefined}
           />
         )}
       />
