@@ -56,7 +56,10 @@ export const ranking = z.object({
       side: side.nullable(),
       rating: z.number().int(),
       provocations: z.array(z.string()),
+      /** Largest share of strength allowed to what provokes it. */
       cap: z.number(),
+      /** The same for the joint's other work; null when everything it does may provoke it. */
+      otherCap: z.number().nullable(),
     }),
   ),
   /** Standing red flags. Exercises that load these joints are never offered. */

@@ -33,6 +33,12 @@ export function capOfRating(sore: Pick<SoreJointInput, 'rating' | 'redFlags'>, r
   return ruleSet.caps.byRating.value[clamp(Math.ceil(sore.rating), 0, 10)] ?? 0
 }
 
+/** The cap on the joint's other channels, at a part of the reduction; null when every channel of the joint is bound. */
+export function otherCapOf(sore: SoreJointInput, ruleSet: RuleSet): number | null {
+  if (provoked(sore, ruleSet).size === channelsOf(sore.joint).length) return null
+  return isRedFlagged(sore, ruleSet) ? 0 : 1 - (1 - capOfRating(sore, ruleSet)) * ruleSet.caps.otherShare.value
+}
+
 /** The channels that the reported provocations bind; all of the joint's when one of them is unknown or has no channel. */
 function provoked({ joint, provocations }: SoreJointInput, ruleSet: RuleSet): ReadonlySet<StressChannel> {
   const map = ruleSet.caps.provocations.value[joint]
@@ -54,8 +60,7 @@ function provoked({ joint, provocations }: SoreJointInput, ruleSet: RuleSet): Re
 export function capsFromSoreness(sore: readonly SoreJointInput[], ruleSet: RuleSet): Cap[] {
   return sore.flatMap((report) => {
     const limit = capOfRating(report, ruleSet)
-    const flagged = isRedFlagged(report, ruleSet)
-    const other = flagged ? 0 : 1 - (1 - limit) * ruleSet.caps.otherShare.value
+    const other = otherCapOf(report, ruleSet) ?? limit
     const bound = provoked(report, ruleSet)
     return channelsOf(report.joint).map((channel): Cap => ({
       joint: report.joint,

@@ -1,6 +1,6 @@
 import type { RuleSet } from '../contract/rule-set'
 import type { LeftOutRow, SwapRow } from '../contract/swap'
-import { capOfRating } from './caps'
+import { capOfRating, otherCapOf } from './caps'
 import { contextOf, type RankContext } from './context'
 import { asJointStress } from './joint-stress'
 import { rate, redFlagReason, shownJoints } from './rate'
@@ -76,6 +76,7 @@ export function resultOf(context: RankContext, rows: Unranked[], leftOut: LeftOu
       rating: report.rating,
       provocations: [...report.provocations],
       cap: capOfRating(report, ruleSet),
+      otherCap: otherCapOf(report, ruleSet),
     })),
     redFlags: flagged.map(({ soreJointId, joint, side, redFlags }) => ({
       soreJointId,

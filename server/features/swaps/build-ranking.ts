@@ -17,7 +17,7 @@ export interface RankingFilters {
 }
 
 /** Changes when the same inputs would no longer give the same bytes for another reason than rules or catalogue. */
-const FORMAT = 1
+const FORMAT = 2
 
 /**
  * Stands for every input of a ranking: whoever sends it back has seen exactly the table that would be made now.

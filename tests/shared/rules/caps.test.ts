@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { JOINTS } from '#shared/mechanics/index'
 import { PROVOCATIONS } from '#shared/contract/sore-joint'
 import { capsFromSoreness, type Cap } from '#shared/rules/index'
+import { otherCapOf } from '#shared/rules/caps'
 import { ruleSet, soreJoint } from './movements'
 
 const limits = (caps: readonly Cap[]) => Object.fromEntries(caps.map(({ channel, limit }) => [channel, limit]))
@@ -15,6 +16,12 @@ describe('caps from a sore joint', () => {
       leaning: 0.75,
       endRange: 0.75,
     })
+  })
+
+  it('name the cap on the other work, unless all of the joint is bound', () => {
+    expect(otherCapOf(soreJoint({ rating: 4, provocations: ['bending'] }), ruleSet)).toBe(0.75)
+    expect(otherCapOf(soreJoint({ rating: 4, provocations: ['unknown'] }), ruleSet)).toBeNull()
+    expect(otherCapOf(soreJoint({ rating: 4, provocations: ['bending'], redFlags: ['nerve'] }), ruleSet)).toBe(0)
   })
 
   it('bind everything when the athlete does not know what provokes it', () => {

@@ -70,7 +70,9 @@ describe('the swap page', () => {
     expect(screen.getByText('4 × 6 at RIR 2, 5 kg', { selector: 'dd' })).toBeInTheDocument()
     expect(screen.getByText('lats, for strength')).toBeInTheDocument()
     expect(screen.getByText('right elbow 4 of 10, bending it under load')).toBeInTheDocument()
-    expect(screen.getByText('cap 50 % of its strength')).toBeInTheDocument()
+    expect(
+      screen.getByText('cap 50 % of its strength where that provokes it, 75 % for its other work'),
+    ).toBeInTheDocument()
   })
 
   it('shows the caution in full in every state, with no way to dismiss it', async () => {

@@ -97,6 +97,7 @@ export function aRanking(change: Partial<Ranking> = {}): Ranking {
         rating: 4,
         provocations: ['bending'],
         cap: 0.5,
+        otherCap: 0.75,
       },
     ],
     redFlags: [],

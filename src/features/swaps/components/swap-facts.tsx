@@ -26,12 +26,15 @@ export function SwapFacts({ ranking, units, loadKind }: SwapFactsProps) {
       {ranking.sore.length > 0 && (
         <div className="border-l-3 border-oxide pl-3">
           <dt className="text-pencil">{ranking.sore.length === 1 ? 'sore joint' : 'sore joints'}</dt>
-          {ranking.sore.map(({ soreJointId, joint, side, rating, provocations, cap }) => (
+          {ranking.sore.map(({ soreJointId, joint, side, rating, provocations, cap, otherCap }) => (
             <dd key={soreJointId}>
               <span className="font-semibold">
                 {jointWords(joint, side)} {rating} of 10, {listWords(provocations.map(provocationWords))}
               </span>
-              <span className="block text-oxide">cap {formatPercent(cap)} of its strength</span>
+              <span className="block text-oxide">
+                cap {formatPercent(cap)} of its strength
+                {otherCap !== null && ` where that provokes it, ${formatPercent(otherCap)} for its other work`}
+              </span>
             </dd>
           ))}
         </div>
