@@ -8,7 +8,7 @@ import { testApp } from '#tests/support/test-app'
 import { ROOM } from '../../../seeds/demo/clubs'
 import { ATHLETES, DEMO_PASSWORDS, ILSE, OSWIN, ROOM_COACH, YARD_COACH } from '../../../seeds/demo/people'
 
-const app = testApp()
+const app = testApp({ PINTLE_DEMO: true })
 let summary: DemoSummary
 beforeAll(async () => {
   const { dataSource, dependencies, clock } = app()
